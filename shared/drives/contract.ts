@@ -1,0 +1,38 @@
+import { z } from 'zod'
+import { storeStatusSchema } from '../stores/contract.ts'
+import { cents, day, instant } from '../wire.ts'
+
+export const driveReply = z.object({
+  driveId: z.string(),
+  name: z.string(),
+  organization: z.string(),
+  status: storeStatusSchema,
+  opensAt: instant,
+  closesAt: instant,
+  /** When somebody closed the store before its time. */
+  closedEarlyAt: instant.nullable(),
+  timeZone: z.string(),
+  turnInOn: day,
+  deliveryFrom: day,
+  deliveryTo: day,
+  role: z.string(),
+  totals: z.object({
+    orders: z.int(),
+    items: z.int(),
+    itemsCents: cents,
+    giftCents: cents,
+    refundedCents: cents,
+    awaitingPayment: z.int(),
+    sellers: z.int(),
+    sellersWithOrders: z.int(),
+  }),
+  groups: z.array(z.object({ name: z.string(), sellers: z.int(), items: z.int(), itemsCents: cents })),
+  sellers: z.array(
+    z.object({ number: z.int(), name: z.string(), group: z.string(), items: z.int(), itemsCents: cents }),
+  ),
+})
+export type DriveView = z.infer<typeof driveReply>
+
+/** Closing early takes a reason, which the activity log keeps. */
+export const closeEarlyBody = z.strictObject({ reason: z.string().trim().min(3, 'Say why, in a few words.').max(300) })
+export const closeEarlyReply = z.object({ closedAt: instant, awaitingPayment: z.int() })
