@@ -186,7 +186,7 @@ function toState(session: Stripe.Checkout.Session): SessionState {
   return {
     sessionId: session.id,
     url: session.url,
-    status: session.status ?? 'open',
+    status: (session.status ?? 'open') as SessionState['status'],
     paid: session.payment_status === 'paid',
     amountTotalCents: session.amount_total ?? 0,
     currency: session.currency ?? '',

@@ -16,13 +16,14 @@ const MAX_PROBLEMS = 50
  */
 export function mountRoutes(app: Express, deps: Deps, routes: readonly AnyRoute[]) {
   const json = express.json({ limit: '64kb', strict: true, type: 'application/json' })
+  const raw = express.raw({ limit: '1mb', type: () => true, inflate: false })
   const seen = new Set<string>()
   for (const spec of routes) {
     const name = `${spec.method.toUpperCase()} /api${spec.path}`
     if (!spec.access?.who) throw new Error(`${name} declares no access`)
     if (seen.has(name)) throw new Error(`${name} is declared twice`)
     seen.add(name)
-    const readBody = spec.body ? [requireJson, json] : []
+    const readBody = spec.rawBody ? [raw] : spec.body ? [requireJson, json] : []
     app[spec.method](
       `/api${spec.path}`,
       (req: Request, _res: Response, next) => {
@@ -60,10 +61,11 @@ async function serve(spec: AnyRoute, deps: Deps, req: Request, res: Response) {
     params: params?.data as never,
     query: query as never,
     body: body as never,
+    rawBody: spec.rawBody ? req.body : undefined,
     granted,
     requestId,
+    request: req,
     header: name => req.get(name)?.trim() || undefined,
-    ip: req.ip ?? '',
   })
   const schema = spec.replies[answer.status]
   if (!schema) throw new Error(`${spec.path} declares no reply ${answer.status}`)

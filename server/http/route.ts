@@ -1,4 +1,4 @@
-import type { Request, Response } from 'express'
+import type { Request } from 'express'
 import type { z } from 'zod'
 import type { DriveRole, StaffRole } from '#shared/people/contract.ts'
 import type { Deps } from '../deps.ts'
@@ -41,18 +41,21 @@ export type Granted = {
 type Schema = z.ZodType | undefined
 type Out<S extends Schema> = S extends z.ZodType ? z.output<S> : undefined
 
-export type Reply = { status: number; body: unknown; headers?: Record<string, string> }
+export type Reply = { status: number; body: unknown; headers?: Record<string, string | string[]> }
 
 export type RouteContext<P extends Schema, Q extends Schema, B extends Schema> = {
   deps: Deps
   params: Out<P>
   query: Out<Q>
   body: Out<B>
+  /** The body as it came, for a route that declares `rawBody`. */
+  rawBody: unknown
   granted: Granted
   requestId: string
+  /** The request itself, for the identity library alone. */
+  request: Request
   /** Trimmed value of a request header, or undefined. */
   header: (name: string) => string | undefined
-  ip: string
 }
 
 export type RouteSpec<P extends Schema = Schema, Q extends Schema = Schema, B extends Schema = Schema> = {
@@ -64,6 +67,8 @@ export type RouteSpec<P extends Schema = Schema, Q extends Schema = Schema, B ex
   params?: P
   query?: Q
   body?: B
+  /** Hands the handler the unread bytes instead, up to 1 MB. */
+  rawBody?: boolean
   /** Header names the route reads, for the published description. */
   headers?: Record<string, string>
   /** Reply schemas by status; a reply is cut to its schema, so that a new column never leaks. */
@@ -83,8 +88,6 @@ export function route<P extends Schema = undefined, Q extends Schema = undefined
   return spec as unknown as AnyRoute
 }
 
-export function reply(status: number, body: unknown, headers?: Record<string, string>): Reply {
+export function reply(status: number, body: unknown, headers?: Record<string, string | string[]>): Reply {
   return headers ? { status, body, headers } : { status, body }
 }
-
-export type ExpressHandler = (req: Request, res: Response) => Promise<void>

@@ -1,0 +1,84 @@
+import { timingSafeEqual } from 'node:crypto'
+import express, { type Express } from 'express'
+import { AppError } from '#shared/errors.ts'
+import type { Deps } from './deps.ts'
+import { errorHandler } from './http/errors.ts'
+import { makeLimits } from './http/limits.ts'
+import { mountRoutes } from './http/mount.ts'
+import { toOpenApi } from './http/openapi.ts'
+import { mountPages, type PageBuild } from './http/pages.ts'
+import { requestLog } from './http/request-log.ts'
+import { refuseCrossSite } from './http/same-origin.ts'
+import { securityHeaders } from './http/security.ts'
+import { mountStatic } from './http/static.ts'
+import { isReady } from './readiness.ts'
+import { routes } from './routes.ts'
+
+/** The whole HTTP surface: what main starts and what the tests start. `pages` null serves the API alone. */
+export function createApp(deps: Deps, pages: PageBuild | null): Express {
+  const app = express()
+  app.disable('x-powered-by')
+  app.set('etag', false)
+  app.set('trust proxy', deps.config.trustProxyHops)
+  app.use(requestLog(deps.log))
+  app.use(securityHeaders(deps.config))
+  const host = new URL(deps.config.publicUrl).host
+  if (deps.config.mode === 'production')
+    app.use((req, res, next) => {
+      // A foreign Host would end up in nothing we build, but is a sign of a request meant for somebody else.
+      if (!req.path.startsWith('/healthz') && !sameText(req.headers.host ?? '', host)) res.status(421).end()
+      else next()
+    })
+
+  app.get('/healthz', (_req, res) => void res.type('text/plain').send('ok'))
+  app.get('/readyz', async (_req, res) => {
+    const state = await isReady(deps)
+    res.status(state.ready ? 200 : 503).json(state)
+  })
+
+  const limits = makeLimits()
+  // Links are guessed here or nowhere: only requests that find nothing count.
+  app.use(['/s/:token', '/r/:receipt', '/api/stores/:token', '/api/receipts/:receipt'], limits.misses)
+  app.post('/api/stores/:token/orders', limits.ordersPerLink)
+  mountIdentity(app, deps, limits.perAccount)
+
+  const description = JSON.stringify(toOpenApi(routes))
+  app.get('/api/openapi.json', (_req, res) => void res.type('application/json').send(description))
+  mountRoutes(app, deps, routes)
+  app.all(['/api', '/api/{*rest}'], () => {
+    throw new AppError('not_found')
+  })
+
+  if (pages) {
+    mountStatic(app, deps, pages)
+    mountPages(app, deps, pages)
+  }
+  app.use(() => {
+    throw new AppError('not_found')
+  })
+  app.use(errorHandler(deps.log))
+  return app
+}
+
+/**
+ * The sign-in library's own routes. It reads the body itself, so ours is read first only to know the account
+ * the attempt is for, and handed on untouched.
+ */
+function mountIdentity(app: Express, deps: Deps, perAccount: express.RequestHandler) {
+  const attempts = ['/api/auth/sign-in/email', '/api/auth/sign-in/magic-link', '/api/auth/request-password-reset']
+  app.use('/api/auth', (req, _res, next) => {
+    if (req.method !== 'GET' && req.method !== 'HEAD') refuseCrossSite(req, deps.config, 'signed_in')
+    next()
+  })
+  // A mail scanner follows links; a link is used up only by the button on our own page.
+  app.all(['/api/auth/magic-link/{*rest}', '/api/auth/sign-up/{*rest}'], () => {
+    throw new AppError('not_found')
+  })
+  app.post(attempts, express.json({ limit: '4kb' }), perAccount)
+  app.all('/api/auth/{*rest}', deps.identity.handler)
+}
+
+function sameText(a: string, b: string): boolean {
+  const [left, right] = [Buffer.from(a), Buffer.from(b)]
+  return left.length === right.length && timingSafeEqual(left, right)
+}

@@ -1,0 +1,44 @@
+import type { Request, RequestHandler } from 'express'
+import { ipKeyGenerator, rateLimit } from 'express-rate-limit'
+import { AppError } from '#shared/errors.ts'
+
+const MINUTE_MS = 60_000
+
+function limiter(options: {
+  perMinute: number
+  key: (req: Request) => string
+  skipSuccessful?: boolean
+}): RequestHandler {
+  return rateLimit({
+    windowMs: MINUTE_MS,
+    limit: options.perMinute,
+    standardHeaders: 'draft-8',
+    legacyHeaders: false,
+    keyGenerator: options.key,
+    skipSuccessfulRequests: options.skipSuccessful ?? false,
+    handler: (_req, _res, next) => next(new AppError('too_many_requests', { retryAfterSeconds: 60 })),
+  })
+}
+
+const byAddress = (req: Request) => ipKeyGenerator(req.ip ?? '')
+
+/**
+ * How often, by what. A whole school behind one address orders and looks on without meeting these; guessing
+ * links does not.
+ */
+export function makeLimits() {
+  return {
+    /** Addresses that find nothing: only failed requests count. */
+    misses: limiter({ perMinute: 30, key: byAddress, skipSuccessful: true }),
+    /** Orders placed through one link. */
+    ordersPerLink: limiter({ perMinute: 120, key: req => `link:${req.params.token}` }),
+    /** Sign-in, links and resets for one account, whoever asks. */
+    perAccount: limiter({
+      perMinute: 10,
+      key: req => {
+        const email = (req.body as { email?: unknown } | undefined)?.email
+        return typeof email === 'string' ? `account:${email.trim().toLowerCase().slice(0, 254)}` : byAddress(req)
+      },
+    }),
+  }
+}
