@@ -65,7 +65,11 @@ export function createApp(deps: Deps, pages: PageBuild | null): Express {
  * the attempt is for, and handed on untouched.
  */
 function mountIdentity(app: Express, deps: Deps, perAccount: express.RequestHandler) {
-  const attempts = ['/api/auth/sign-in/email', '/api/auth/sign-in/magic-link', '/api/auth/request-password-reset']
+  const attempts = [
+    '/api/auth/sign-in/email',
+    '/api/auth/sign-in/magic-link',
+    '/api/auth/request-password-reset',
+  ]
   app.use('/api/auth', (req, _res, next) => {
     if (req.method !== 'GET' && req.method !== 'HEAD') refuseCrossSite(req, deps.config, 'signed_in')
     next()

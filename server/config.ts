@@ -21,8 +21,10 @@ const environment = z.object({
   PORT: port('4310'),
   PUBLIC_URL: address.optional(),
   DATA_DIR: z.string().min(1).default('./data'),
-  TALLYKIN_NOW: z.iso.datetime({ offset: true, message: 'must be an ISO instant such as 2026-11-20T23:59:00Z' }).optional(),
-  STRIPE_SECRET_KEY: z.string().min(8, 'must be the payment service\'s secret key'),
+  TALLYKIN_NOW: z.iso
+    .datetime({ offset: true, message: 'must be an ISO instant such as 2026-11-20T23:59:00Z' })
+    .optional(),
+  STRIPE_SECRET_KEY: z.string().min(8, "must be the payment service's secret key"),
   STRIPE_WEBHOOK_SECRET: z.string().min(8, 'must be the secret the payment service signs its webhooks with'),
   STRIPE_API_BASE: address.optional(),
   SMTP_URL: z.string().regex(/^smtps?:\/\/.+/, 'must be an smtp:// or smtps:// address'),
@@ -59,11 +61,16 @@ export type Config = {
  * @throws Error whose message lists every problem at once, one line each, naming the variable.
  */
 export function loadConfig(env: Record<string, string | undefined>): Config {
-  const given = Object.fromEntries(Object.entries(env).filter(([, value]) => value !== undefined && value !== ''))
+  const given = Object.fromEntries(
+    Object.entries(env).filter(([, value]) => value !== undefined && value !== ''),
+  )
   const parsed = environment.safeParse(given)
   const problems = parsed.success
     ? []
-    : parsed.error.issues.map(issue => `${issue.path.join('.')} ${env[String(issue.path[0])] === undefined ? 'is missing: it ' : ''}${issue.message}`)
+    : parsed.error.issues.map(
+        issue =>
+          `${issue.path.join('.')} ${env[String(issue.path[0])] === undefined ? 'is missing: it ' : ''}${issue.message}`,
+      )
   if (parsed.success) problems.push(...productionProblems(parsed.data))
   if (!parsed.success || problems.length > 0) throw new Error(problems.join('\n'))
 
@@ -94,8 +101,10 @@ function productionProblems(e: z.infer<typeof environment>): string[] {
   if (e.TALLYKIN_MODE !== 'production') return problems
   if (e.TALLYKIN_NOW) problems.push('TALLYKIN_NOW is refused in production: the clock is the clock')
   if (e.STRIPE_API_BASE) problems.push('STRIPE_API_BASE is refused in production: it points at a stand-in')
-  if (!e.PUBLIC_URL?.startsWith('https://')) problems.push('PUBLIC_URL must be an https address in production')
-  if (!/^(sk|rk)_live_/.test(e.STRIPE_SECRET_KEY)) problems.push('STRIPE_SECRET_KEY must be a live key in production')
+  if (!e.PUBLIC_URL?.startsWith('https://'))
+    problems.push('PUBLIC_URL must be an https address in production')
+  if (!/^(sk|rk)_live_/.test(e.STRIPE_SECRET_KEY))
+    problems.push('STRIPE_SECRET_KEY must be a live key in production')
   if (/^(.)\1+$/.test(e.AUTH_SECRET)) problems.push('AUTH_SECRET must not be one character repeated')
   return problems
 }

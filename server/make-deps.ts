@@ -5,8 +5,8 @@ import type { Now } from './clock.ts'
 import type { Config } from './config.ts'
 import type { Db } from './db/open.ts'
 import type { Deps } from './deps.ts'
-import { makeIdentityMail } from './people/identity-mail.ts'
 import { makeIdentity } from './people/identity.ts'
+import { makeIdentityMail } from './people/identity-mail.ts'
 
 /** Builds what operations need from the configuration and an open database. */
 export function makeDeps(from: { config: Config; db: Db; log: Logger; now: Now }): Deps {

@@ -6,12 +6,19 @@ import type { Deps } from './deps.ts'
 /** A letter that is due this long and not yet tried means that the worker stands still. */
 const STANDSTILL_MS = 30_000
 
-export type Readiness = { ready: boolean; seeded: boolean; outboxMoves: boolean; mail: boolean; payments: boolean }
+export type Readiness = {
+  ready: boolean
+  seeded: boolean
+  outboxMoves: boolean
+  mail: boolean
+  payments: boolean
+}
 
 /** Whether the whole product can do its work now; in the demonstration also whether its data are there. */
 export async function isReady(deps: Deps): Promise<Readiness> {
   const seeded =
-    deps.config.mode !== 'demo' || deps.db.orm.select({ id: drive.id }).from(drive).limit(1).get() !== undefined
+    deps.config.mode !== 'demo' ||
+    deps.db.orm.select({ id: drive.id }).from(drive).limit(1).get() !== undefined
   const stuck = deps.db.orm
     .select({ id: outbox.id })
     .from(outbox)

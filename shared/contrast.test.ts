@@ -23,6 +23,12 @@ test('the formula gives the published values (WCAG 2.2, relative luminance and s
   expect(contrast('#767676', '#ffffff')).toBeCloseTo(4.5422, 3)
   expect(contrast('#777777', '#ffffff')).toBeCloseTo(4.4781, 3)
   expect(contrast('#1a4d8f', '#ffffff')).toBeCloseTo(8.3929, 3)
+  expect(contrast('#949494', '#ffffff')).toBeCloseTo(3.0335, 3)
+  expect(contrast('#959595', '#ffffff')).toBeCloseTo(2.9953, 3)
+  expect(contrast('#595959', '#ffffff')).toBeCloseTo(7.0047, 3)
+  expect(contrast('#ff0000', '#ffffff')).toBeCloseTo(3.9985, 3)
+  expect(contrast('#0000ff', '#ffffff')).toBeCloseTo(8.5925, 3)
+  expect(contrast('#000000', '#ffffff')).toBeCloseTo(21, 6)
 })
 
 test.each([

@@ -22,10 +22,20 @@ test('one wrong character or two neighbors swapped is always noticed', () => {
       const plain = makeOrderNumber(random).replace('-', '')
       const wrong = plain.slice(0, place) + ALPHABET[other] + plain.slice(place + 1)
       expect(isOrderNumber(wrong)).toBe(wrong === plain)
-      if (place === 7) return
-      const swapped = plain.slice(0, place) + plain[place + 1] + plain[place] + plain.slice(place + 2)
-      // The check character itself swapped with its neighbor may agree by chance; between letters of the body, never.
-      if (place < 6) expect(isOrderNumber(swapped)).toBe(swapped === plain)
+      const left = Math.min(place, 6)
+      const swapped = plain.slice(0, left) + plain[left + 1] + plain[left] + plain.slice(left + 2)
+      expect(isOrderNumber(swapped)).toBe(swapped === plain)
     }),
   )
+})
+
+test.each(['', '4K7A', '4K7A-2MX', '4K7A-2MX99', 'OOOO-OOOO', '４K7A-2MX9'])(
+  '%j is no order number',
+  text => {
+    expect(isOrderNumber(text)).toBe(false)
+  },
+)
+
+test('too little randomness is an error, not a weak number', () => {
+  expect(() => makeOrderNumber(new Uint8Array(6))).toThrow(RangeError)
 })

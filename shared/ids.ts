@@ -31,7 +31,10 @@ export function normalOrderNumber(text: string): string {
  * always changes it.
  */
 function checkCharacter(body: string): string {
-  const sum = [...body].reduce((total, character, place) => total + ALPHABET.indexOf(character) * (place + 2), 0)
+  const sum = [...body].reduce(
+    (total, character, place) => total + ALPHABET.indexOf(character) * (place + 2),
+    0,
+  )
   return ALPHABET[sum % BASE]!
 }
 

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { cleanText, isEmailAddress, normalEmail } from './text.ts'
+import { cleanText, isEmailAddress, normalEmail, suggestEmail } from './text.ts'
 
 const kept = (text: string, max = 100) => {
   const cleaned = cleanText(text, { max })
@@ -26,7 +26,33 @@ test.each([
 
 test('invisible characters at the ends are no letters', () => {
   expect(kept('\u00a0\u200b Ana \ufeff')).toBe('Ana')
-  expect(kept('\u200b\u200b')).toBe('')
+  expect(kept('\u00ad\u200dAna\u200c')).toBe('Ana')
+})
+
+test.each([
+  ['zero-width spaces', '\u200b\u200b'],
+  ['joiners and a soft hyphen', '\u200d\u200c\u00ad'],
+  ['Hangul fillers', '\u3164\u3164'],
+  ['blank Braille', '\u2800'],
+  ['direction marks', '\u202e\u200f'],
+  ['spaces', ' \t\u3000'],
+])('%s alone are an empty text', (_what, text) => {
+  expect(kept(text)).toBe('')
+})
+
+test('a long run of spaces inside is measured at once, not after seconds', () => {
+  const long = `x${' '.repeat(200_000)}x`
+  const started = performance.now()
+  expect(kept(long, 300)).toBeNull()
+  expect(performance.now() - started).toBeLessThan(1_000)
+})
+
+test('several lines are kept where they are asked for, and refused elsewhere', () => {
+  expect(cleanText('Thank you,\nRuth', { max: 300, multiline: true })).toEqual({
+    ok: true,
+    text: 'Thank you,\nRuth',
+  })
+  expect(kept('Thank you,\nRuth')).toBeNull()
 })
 
 test('two spellings of one letter are one', () => {
@@ -51,12 +77,15 @@ test('direction overrides are dropped, the letters stay', () => {
   expect(kept('\u202eevil\u202c Ana')).toBe('evil Ana')
 })
 
-test.each(['a@b.co', "o'neil@b.co", 'A+tag@Ex.COM', 'ruth@example.com', `${'a'.repeat(64)}@${'b'.repeat(60)}.example.com`])(
-  '%s is an address',
-  email => {
-    expect(isEmailAddress(email)).toBe(true)
-  },
-)
+test.each([
+  'a@b.co',
+  "o'neil@b.co",
+  'A+tag@Ex.COM',
+  'ruth@example.com',
+  `${'a'.repeat(64)}@${'b'.repeat(60)}.example.com`,
+])('%s is an address', email => {
+  expect(isEmailAddress(email)).toBe(true)
+})
 
 test.each([
   'a@b',
@@ -79,4 +108,29 @@ test.each([
 
 test('addresses are compared in small letters', () => {
   expect(normalEmail('A+tag@Ex.COM')).toBe('a+tag@ex.com')
+})
+
+test.each([
+  ['ruth@gmial.com', 'ruth@gmail.com'],
+  ['ruth@gamil.com', 'ruth@gmail.com'],
+  ['ruth@gmai.com', 'ruth@gmail.com'],
+  ['ruth@gmail.con', 'ruth@gmail.com'],
+  ['ruth@gmail.co', 'ruth@gmail.com'],
+  ['Ruth.Ortega@YAHOOO.com', 'Ruth.Ortega@yahoo.com'],
+  ['ruth@hotmal.com', 'ruth@hotmail.com'],
+  ['ruth@comcast.nte', 'ruth@comcast.net'],
+])('%s is questioned: did you mean %s', (typed, meant) => {
+  expect(suggestEmail(typed)).toBe(meant)
+})
+
+test.each([
+  'ruth@gmail.com',
+  'ruth@mail.com',
+  'ruth@ymail.com',
+  'ruth@saltmarsh.example',
+  'gmial.com',
+  '@gmial.com',
+  '',
+])('%j is not questioned', typed => {
+  expect(suggestEmail(typed)).toBeNull()
 })

@@ -15,6 +15,9 @@ export function mailPage(page: {
   asText: boolean
 }): string {
   const { message } = page
+  const count = page.count === 1 ? '1 letter' : `${page.count} letters`
+  // The letter's subject is the page's heading once one is open.
+  const heading = message ? html`<h2 id="all">${count}</h2>` : html`<h1 id="all">${count}</h1>`
   const title = message ? `${message.subject || 'No subject'} · Mail catcher` : 'Mail catcher'
   return `<!doctype html>${html`<html lang="en">
     <head>
@@ -25,12 +28,12 @@ export function mailPage(page: {
       <style nonce="${page.nonce}">${new Markup(PAGE_STYLE + STYLE)}</style>
     </head>
     <body class="${message ? 'reading' : 'listing'}">
-      <p class="notice" role="note"><strong>Mail catcher.</strong>
-        This stands in for everybody’s mailbox: letters are kept here and go no further.</p>
-      <div class="rooms">
+      <header class="notice"><p><strong>Mail catcher.</strong>
+        This stands in for everybody’s mailbox: letters are kept here and go no further.</p></header>
+      <main class="rooms">
         <section class="list" aria-labelledby="all">
           <header>
-            <h2 id="all">${page.count === 1 ? '1 letter' : `${page.count} letters`}</h2>
+            ${heading}
             <a href="/">Look for new mail</a>
           </header>
           ${page.notes.map(noteOf)}
@@ -46,8 +49,8 @@ export function mailPage(page: {
           )}</ol>
           ${page.count > SHOWN && html`<p class="soft empty">The newest ${SHOWN} are shown.</p>`}
         </section>
-        <main>${message ? letterOf(message, page.asText) : html`<p class="soft choose">Choose a letter to read it.</p>`}</main>
-      </div>
+        <div class="desk">${message ? letterOf(message, page.asText) : html`<p class="soft choose">Choose a letter to read it.</p>`}</div>
+      </main>
     </body>
   </html>`}`
 }
@@ -112,14 +115,13 @@ const longDate = (iso: string) => `${LONG.format(new Date(iso))} (UTC)`
 const STYLE = `
 .rooms { max-width: 90rem; margin: 0 auto; }
 .list > header { display: flex; justify-content: space-between; align-items: baseline; gap: 1rem; padding: 1.1rem 1.25rem .8rem; }
-.list h2 { font-size: 1.25rem; }
+#all { font-size: 1.25rem; }
 .list ol { list-style: none; background: var(--sheet); border-top: 1px solid var(--rule); }
 .list li { border-bottom: 1px solid var(--rule); }
-.list li a { display: grid; grid-template-columns: 1fr auto; gap: 0 1rem; padding: .8rem 1.25rem; text-decoration: none; }
+.list li a { display: grid; padding: .8rem 1.25rem; text-decoration: none; }
 .list li a:hover { background: #f3f6fa; }
 .list li a:focus-visible { outline-offset: -3px; }
-.list .subject { font-weight: 600; grid-column: 1 / -1; }
-.list time { white-space: nowrap; }
+.list .subject { font-weight: 600; }
 .list [aria-current] { box-shadow: inset 4px 0 var(--ink); background: #f3f6fa; }
 .empty, .choose { padding: 1rem 1.25rem; }
 .note { background: var(--sheet); border-top: 1px solid var(--rule); font-size: .9375rem; }
@@ -140,14 +142,14 @@ article h1 { font-size: 1.5rem; padding: .25rem 1.25rem .75rem; font-weight: 650
 iframe { flex: 1; width: 100%; min-height: 75vh; border: 0; background: #fff; }
 pre { flex: 1; margin: 0; padding: 1.25rem; white-space: pre-wrap; font: .9375rem/1.55 ui-monospace, 'DejaVu Sans Mono', monospace; }
 @media (max-width: 55.99rem) {
-  .reading .list, .listing main { display: none; }
+  .reading .list, .listing .desk { display: none; }
   .sheet { border-width: 0 0 1px; }
 }
 @media (min-width: 56rem) {
   body { height: 100vh; display: flex; flex-direction: column; }
   .rooms { flex: 1; min-height: 0; width: 100%; display: grid; grid-template-columns: 24rem 1fr; }
   .list { overflow-y: auto; border-right: 1px solid var(--rule); }
-  main { overflow-y: auto; padding: 1.5rem; display: grid; }
+  .desk { overflow-y: auto; padding: 1.5rem; display: grid; }
   .back { display: none; }
   article { min-height: 0; }
   article h1 { padding-top: 1.25rem; font-size: 1.75rem; }

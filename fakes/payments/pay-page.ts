@@ -40,13 +40,12 @@ export function cardFormPage(page: {
     </div>`
   }
 
-  const body = html`<main class="pay">
-    <header>
-      <p class="soft">${texts.due}</p>
-      <h1>${total}</h1>
+  const body = html`<main class="pay"><div class="sheet">
+    <div class="due">
+      <h1><span>${texts.due}</span> <span class="amount">${total}</span></h1>
       <p class="soft">${texts.closesIn(page.minutesLeft)}</p>
-    </header>
-    <form class="sheet" method="post" novalidate>
+    </div>
+    <form method="post" novalidate>
       ${
         problems.whole &&
         html`<div class="problem whole" role="alert" tabindex="-1" autofocus>
@@ -64,7 +63,7 @@ export function cardFormPage(page: {
       <h2 id="lines">${texts.order}</h2>
       <ul>${page.lines.map(
         line =>
-          html`<li><span>${line.quantity} × ${line.description}</span> <span>${money(line.amount_total)}</span></li>`,
+          html`<li><span>${line.quantity} × ${line.description}</span> <span class="amount">${money(line.amount_total)}</span></li>`,
       )}
         <li class="total"><span>${texts.total}</span> <span>${total}</span></li>
       </ul>
@@ -76,7 +75,7 @@ export function cardFormPage(page: {
         )}</ul>
       </details>
     </section>
-  </main>`
+  </div></main>`
   const title = hasProblem ? `${texts.errorTitle}: ${texts.pay(total)}` : texts.pay(total)
   return pageOf({ language, nonce: page.nonce, title, body })
 }
@@ -110,7 +109,7 @@ function pageOf({ language, nonce, title, body }: PageParts): string {
       <style nonce="${nonce}">${new Markup(PAGE_STYLE + STYLE)}</style>
     </head>
     <body>
-      <p class="notice" role="note"><strong>${texts.notice}</strong> ${texts.noticeMore}</p>
+      <header class="notice"><p><strong>${texts.notice}</strong> ${texts.noticeMore}</p></header>
       ${body}
     </body>
   </html>`}`
@@ -123,38 +122,42 @@ function moneyIn(language: Language, currency: string): (cents: number) => strin
 }
 
 const STYLE = `
-.notice { text-align: center; margin: 0; }
-main.pay { display: grid; gap: 1.25rem; max-width: 62rem; margin: 0 auto; padding: 1.5rem 1rem 3rem; }
-h1 { font-size: 2.75rem; font-weight: 600; letter-spacing: -.01em; }
-form { padding: 1.25rem; display: grid; gap: 1.1rem 1rem; grid-template-columns: 1fr 1fr; align-items: start; }
+.notice { text-align: center; }
+main.pay { max-width: 40rem; margin: 0 auto; padding: 1.5rem 1rem 3rem; }
+.due { padding: 1.5rem 1.25rem 1.1rem; border-bottom: 2px solid var(--ink); }
+h1 { display: flex; justify-content: space-between; align-items: baseline; gap: 1rem; font-weight: 600; }
+h1 span { font-size: 1.25rem; }
+h1 .amount { font-size: 2.5rem; letter-spacing: -.01em; }
+form { padding: 1.25rem; display: grid; gap: 1.1rem 1rem; grid-template-columns: 5fr 7fr; align-items: start; }
 .number, .name, form > button, .back, .whole { grid-column: 1 / -1; }
-label { display: block; font-weight: 600; margin-bottom: .3rem; }
+label { display: block; font-size: 1rem; font-weight: 600; margin-bottom: .3rem; }
 input { width: 100%; min-height: 3rem; padding: .5rem .75rem; font: inherit; font-size: 1.125rem; color: inherit;
   background: var(--sheet); border: 1px solid var(--field); border-radius: 2px; }
 input[aria-invalid] { border: 2px solid var(--alarm); }
 .field .soft, .field .problem { margin-top: .35rem; }
 .problem { color: var(--alarm); font-weight: 600; font-size: .9375rem; }
-.whole { border-left: 4px solid var(--alarm); padding: .35rem 0 .35rem .9rem; font-weight: 400; font-size: 1rem; }
-button { min-height: 3.25rem; padding: .5rem 1rem; font: inherit; font-size: 1.1875rem; font-weight: 600; color: #fff; background: var(--ink);
-  border: 0; border-radius: 2px; cursor: pointer; }
+.whole { border-left: 4px solid var(--alarm); padding: .35rem .9rem; font-weight: 400; font-size: 1rem; }
+button { min-height: 3.25rem; padding: .5rem 1rem; font: inherit; font-size: 1.1875rem; font-weight: 600; color: #fff;
+  background: var(--ink); border: 0; border-radius: 2px; cursor: pointer; }
 button:hover { background: #0d1840; }
-.back { text-align: center; }
 .back a, .closed a { display: inline-block; padding: .6rem 0; }
+.lines { padding: 1.25rem; border-top: 2px dashed var(--rule); }
 .lines h2 { font-size: 1.0625rem; margin-bottom: .5rem; }
 .lines ul { list-style: none; }
 .lines li { display: flex; justify-content: space-between; gap: 1rem; padding: .5rem 0; border-top: 1px solid var(--rule); }
-.lines li > :last-child { text-align: right; flex: none; max-width: 60%; }
-.lines .total { border-top: 2px solid var(--ink); font-weight: 650; }
-details { margin-top: 1.25rem; font-size: .9375rem; }
+.lines li > :last-child { text-align: right; }
+.amount, .lines .number { white-space: nowrap; }
+.lines .total { border-top: 2px solid var(--ink); font-weight: 600; }
+details { margin-top: 1rem; font-size: .9375rem; }
 summary { cursor: pointer; padding: .6rem 0; }
-.lines .number { white-space: nowrap; }
 .closed { max-width: 34rem; margin: 12vh auto 0; padding: 2rem 1.5rem; display: grid; gap: 1rem; }
-.closed h1 { font-size: 1.75rem; }
+.closed h1 { display: block; font-size: 1.75rem; }
 @media (max-width: 36rem) { .closed { margin: 1.5rem 1rem 0; } }
 @media (max-width: 22rem) { .field { grid-column: 1 / -1; } }
-@media (min-width: 56rem) {
-  main.pay { grid-template-columns: 1fr 1.15fr; grid-template-rows: auto 1fr; gap: 2rem 4rem; padding-top: 4.5rem; }
-  .pay form { grid-column: 2; grid-row: 1 / 3; padding: 2rem; }
-  h1 { font-size: 3.5rem; }
+@media (max-width: 30rem) { :lang(es) .field { grid-column: 1 / -1; } }
+@media (min-width: 48rem) {
+  main.pay { padding-top: 2.5rem; }
+  .due, form, .lines { padding-inline: 2.25rem; }
+  form { padding-block: 1.75rem; }
 }
 `

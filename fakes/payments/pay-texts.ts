@@ -32,8 +32,10 @@ type Texts = {
   unknown: { title: string; text: string }
 }
 
+/** With spaces that do not break, so that the number stays on one line. */
+const TEST_NUMBER = '4242\u00a04242\u00a04242\u00a04242'
 const TEST_NUMBERS = [
-  '4242 4242 4242 4242',
+  TEST_NUMBER,
   '4000 0000 0000 0002',
   '4000 0000 0000 9995',
   '4000 0000 0000 0069',
@@ -52,7 +54,7 @@ export const TEXTS: Record<Language, Texts> = {
     pay: amount => `Pay ${amount}`,
     labels: { number: 'Card number', expiry: 'Expiry', code: 'Security code', name: 'Name on card' },
     hints: {
-      number: 'For the demonstration: 4242 4242 4242 4242',
+      number: `Type ${TEST_NUMBER} here`,
       expiry: 'Month and year, as 08/30',
       code: 'Any three digits',
     },
@@ -116,7 +118,7 @@ export const TEXTS: Record<Language, Texts> = {
       name: 'Nombre en la tarjeta',
     },
     hints: {
-      number: 'Para la demostración: 4242 4242 4242 4242',
+      number: `Escriba aquí ${TEST_NUMBER}`,
       expiry: 'Mes y año, como 08/30',
       code: 'Tres dígitos cualesquiera',
     },

@@ -79,7 +79,9 @@ function listSafety(tx: Tx, of: { catalogId: number; at: number }): Map<string, 
       mayContain: JSON.parse(row.mayContain),
       storage: row.storage,
       bestQualityMonths:
-        row.bestQualityMin !== null && row.bestQualityMax !== null ? [row.bestQualityMin, row.bestQualityMax] : null,
+        row.bestQualityMin !== null && row.bestQualityMax !== null
+          ? [row.bestQualityMin, row.bestQualityMax]
+          : null,
     })
   return current
 }

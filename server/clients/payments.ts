@@ -156,7 +156,15 @@ export function makePayments(config: Config, now: () => number) {
     readAnnouncement(rawBody: Buffer, signature: string): PaymentAnnouncement {
       const stamp = Number(/(?:^|,)t=(\d+)/.exec(signature)?.[1])
       if (!(stamp <= now() / 1000 + MAX_AHEAD_SECONDS)) throw new Error('stamp in the future')
-      const event = stripe.webhooks.constructEvent(rawBody, signature, config.stripe.webhookSecret)
+      const event = stripe.webhooks.constructEvent(
+        rawBody,
+        signature,
+        config.stripe.webhookSecret,
+        // The tolerance stays the SDK's own; an explicit 0 would switch the age check off.
+        undefined,
+        undefined,
+        now(),
+      )
       const object = event.data.object as unknown as Record<string, unknown>
       const isSession = object.object === 'checkout.session'
       return {
@@ -176,7 +184,8 @@ async function call<T>(request: () => Promise<T>): Promise<T> {
   } catch (error) {
     if (error instanceof Stripe.errors.StripeInvalidRequestError)
       throw new PaymentServiceError('refused', error.message, error.code)
-    if (error instanceof Stripe.errors.StripeError) throw new PaymentServiceError('unsure', error.message, error.code)
+    if (error instanceof Stripe.errors.StripeError)
+      throw new PaymentServiceError('unsure', error.message, error.code)
     throw error
   }
 }

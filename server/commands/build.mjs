@@ -8,7 +8,16 @@ import { ensureInstalled } from './bootstrap.mjs'
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '../..')
 const dist = join(root, 'dist')
-const SOURCES = ['server', 'web', 'shared', 'emails', 'fakes', 'package-lock.json', 'vite.config.ts', 'tsconfig.json']
+const SOURCES = [
+  'server',
+  'web',
+  'shared',
+  'emails',
+  'fakes',
+  'package-lock.json',
+  'vite.config.ts',
+  'tsconfig.json',
+]
 
 /** Builds everything, unless the last build was made from these very sources. */
 export async function build({ force = false } = {}) {

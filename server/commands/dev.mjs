@@ -23,11 +23,16 @@ try {
   const seed = startService('seed', join(root, 'server/demo/seed-main.ts'), fromSources)
   await seed.ready
   // tsx watches what the server imports and starts it anew when that changes.
-  const app = startService('Tallykin', join(root, 'node_modules/tsx/dist/cli.mjs'), { env, args: ['watch', 'server/main.ts'] })
+  const app = startService('Tallykin', join(root, 'node_modules/tsx/dist/cli.mjs'), {
+    env,
+    args: ['watch', 'server/main.ts'],
+  })
   services.push(app)
   app.child.once('exit', () => stop(1))
   await waitFor(`http://localhost:${env.PORT}/readyz`)
-  const { describeDemo } = await import('tsx/esm/api').then(tsx => tsx.tsImport('../demo/describe-demo.ts', import.meta.url))
+  const { describeDemo } = await import('tsx/esm/api').then(tsx =>
+    tsx.tsImport('../demo/describe-demo.ts', import.meta.url),
+  )
   process.stdout.write(describeDemo(env))
 } catch (error) {
   process.stderr.write(`${error.message}\n`)

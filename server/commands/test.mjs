@@ -37,23 +37,39 @@ const playwrightReport = join(tmpdir(), `tallykin-playwright-${process.pid}.json
 
 await run('types', [bin('typescript/bin/tsc'), '-p', '.'])
 await run('format and lint', [bin('@biomejs/biome/bin/biome'), 'ci', '.'])
-await run('unit and integration', [bin('vitest/vitest.mjs'), 'run', '--reporter=default', '--reporter=json', `--outputFile.json=${vitestReport}`], {
-  report: () => {
-    const result = readJson(vitestReport)
-    return result && { passed: result.numPassedTests, failed: result.numFailedTests }
+await run(
+  'unit and integration',
+  [
+    bin('vitest/vitest.mjs'),
+    'run',
+    '--reporter=default',
+    '--reporter=json',
+    `--outputFile.json=${vitestReport}`,
+  ],
+  {
+    report: () => {
+      const result = readJson(vitestReport)
+      return result && { passed: result.numPassedTests, failed: result.numFailedTests }
+    },
   },
-})
+)
 try {
   process.stdout.write('\n== build\n')
   await build()
   counts.passed += 1
   process.env.PLAYWRIGHT_JSON_OUTPUT_NAME = playwrightReport
-  await run('end to end', [bin('playwright/cli.js'), 'test', '-c', 'e2e/playwright.config.ts', '--reporter=list,json'], {
-    report: () => {
-      const result = readJson(playwrightReport)
-      return result && { passed: result.stats.expected, failed: result.stats.unexpected + result.stats.flaky }
+  await run(
+    'end to end',
+    [bin('playwright/cli.js'), 'test', '-c', 'e2e/playwright.config.ts', '--reporter=list,json'],
+    {
+      report: () => {
+        const result = readJson(playwrightReport)
+        return (
+          result && { passed: result.stats.expected, failed: result.stats.unexpected + result.stats.flaky }
+        )
+      },
     },
-  })
+  )
 } catch (error) {
   process.stderr.write(`${error.stack}\n`)
   counts.failed += 1

@@ -20,7 +20,10 @@ export function migrate(db: Db, folder: string): { applied: string[] } {
     'CREATE TABLE IF NOT EXISTS schema_migration (name TEXT PRIMARY KEY, hash TEXT NOT NULL, at INTEGER NOT NULL) STRICT',
   )
   const steps = readSteps(folder)
-  const done = db.raw.prepare('SELECT name, hash FROM schema_migration').all() as { name: string; hash: string }[]
+  const done = db.raw.prepare('SELECT name, hash FROM schema_migration').all() as {
+    name: string
+    hash: string
+  }[]
   for (const past of done) {
     const step = steps.find(s => s.name === past.name)
     if (!step) throw new Error(`Migration ${past.name} was applied here and is missing from this build`)
@@ -42,7 +45,8 @@ export function migrate(db: Db, folder: string): { applied: string[] } {
             .run(step.name, step.hash, Date.now())
         }
         const broken = db.raw.pragma('foreign_key_check') as unknown[]
-        if (broken.length > 0) throw new Error(`Migrations would break ${broken.length} references; nothing was changed`)
+        if (broken.length > 0)
+          throw new Error(`Migrations would break ${broken.length} references; nothing was changed`)
         const after = rowCounts(db)
         for (const [table, rows] of before)
           if ((after.get(table) ?? rows) < rows)
@@ -82,7 +86,9 @@ function readSteps(folder: string): Step[] {
 
 function rowCounts(db: Db): Map<string, number> {
   const tables = db.raw
-    .prepare("SELECT name FROM sqlite_master WHERE type = 'table' AND name NOT LIKE 'sqlite_%' AND name <> 'schema_migration'")
+    .prepare(
+      "SELECT name FROM sqlite_master WHERE type = 'table' AND name NOT LIKE 'sqlite_%' AND name <> 'schema_migration'",
+    )
     .all() as { name: string }[]
   return new Map(
     tables.map(({ name }) => [

@@ -48,7 +48,9 @@ export function openDb(file: string): Db {
   const foreignKeys = raw.pragma('foreign_keys', { simple: true })
   if (synchronous !== 2 || foreignKeys !== 1 || journal !== 'wal') {
     raw.close()
-    throw new Error(`The database does not hold its promises: synchronous=${synchronous}, journal=${journal}, foreign_keys=${foreignKeys}`)
+    throw new Error(
+      `The database does not hold its promises: synchronous=${synchronous}, journal=${journal}, foreign_keys=${foreignKeys}`,
+    )
   }
   return { raw, orm: drizzle(raw, { schema, casing: 'snake_case' }) }
 }

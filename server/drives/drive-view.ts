@@ -1,5 +1,5 @@
-import type { DriveView } from '#shared/drives/contract.ts'
 import { storeStatus } from '#shared/deadline/store-status.ts'
+import type { DriveView } from '#shared/drives/contract.ts'
 import type { Deps } from '../deps.ts'
 import { listDays, totalsBySeller } from '../orders/tallies.ts'
 import { listGroups, listHouseSellers, listStudents } from '../sellers/queries.ts'

@@ -34,7 +34,10 @@ export const driveRoutes = [
         reason: body.reason,
         requestId,
       })
-      return reply(200, { closedAt: new Date(closed.closedAt).toISOString(), awaitingPayment: closed.awaitingPayment })
+      return reply(200, {
+        closedAt: new Date(closed.closedAt).toISOString(),
+        awaitingPayment: closed.awaitingPayment,
+      })
     },
   }),
 ]

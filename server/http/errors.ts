@@ -47,8 +47,10 @@ const sentences: Record<ErrorCode, string> = {
   key_reused: 'This key was already used for another order.',
   in_progress: 'This order is being placed right now. Please ask again in a moment.',
   conflict: 'This was changed by somebody else in the meantime. Please look again.',
-  payments_stopped: 'Payments for this fundraiser are on hold while the numbers are being checked. Nothing was charged.',
-  payment_service_unreachable: 'The payment service does not answer. Nothing was charged and your order is kept; please try again.',
+  payments_stopped:
+    'Payments for this fundraiser are on hold while the numbers are being checked. Nothing was charged.',
+  payment_service_unreachable:
+    'The payment service does not answer. Nothing was charged and your order is kept; please try again.',
   busy: 'The server is busy. Please try again in a moment.',
   internal: 'Something went wrong on our side. It has been noted.',
 }
@@ -92,7 +94,10 @@ export function toAppError(thrown: unknown, log: Logger, requestId: string): App
     return new AppError('busy', { retryAfterSeconds: 2 })
   }
   const error = thrown instanceof Error ? thrown : new Error('thrown value is no error')
-  log.error({ requestId, error: { name: error.name, message: error.message, stack: error.stack } }, 'unexpected')
+  log.error(
+    { requestId, error: { name: error.name, message: error.message, stack: error.stack } },
+    'unexpected',
+  )
   return new AppError('internal')
 }
 

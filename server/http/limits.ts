@@ -37,7 +37,9 @@ export function makeLimits() {
       perMinute: 10,
       key: req => {
         const email = (req.body as { email?: unknown } | undefined)?.email
-        return typeof email === 'string' ? `account:${email.trim().toLowerCase().slice(0, 254)}` : byAddress(req)
+        return typeof email === 'string'
+          ? `account:${email.trim().toLowerCase().slice(0, 254)}`
+          : byAddress(req)
       },
     }),
   }

@@ -8,7 +8,13 @@ import type { PageBuild, PageData } from './pages.ts'
 
 /** What the client's server entry gives: one function that renders, one that puts the document around it. */
 type Renderer = {
-  render: (request: { url: string; locale: 'en' | 'es'; data: PageData; now: number; nonce: string }) => Promise<{
+  render: (request: {
+    url: string
+    locale: 'en' | 'es'
+    data: PageData
+    now: number
+    nonce: string
+  }) => Promise<{
     status: number
     html: string
     head: unknown
@@ -141,7 +147,10 @@ async function loadDevPages(): Promise<LoadedPages> {
           locale: request.locale,
           publicUrl: request.publicUrl,
         })
-        return { status: page.status, html: withNonce(await vite.transformIndexHtml(request.url, html), request.nonce) }
+        return {
+          status: page.status,
+          html: withNonce(await vite.transformIndexHtml(request.url, html), request.nonce),
+        }
       },
       async deskPage({ nonce, url }) {
         const renderer = await load()

@@ -82,7 +82,8 @@ async function serve(spec: AnyRoute, deps: Deps, req: Request, res: Response) {
 
 function requireJson(req: Request, _res: Response, next: (error?: unknown) => void) {
   const type = req.headers['content-type'] ?? ''
-  if (!/^application\/json\s*(;\s*charset=("?)utf-8\2\s*)?$/i.test(type)) throw new AppError('unsupported_media_type')
+  if (!/^application\/json\s*(;\s*charset=("?)utf-8\2\s*)?$/i.test(type))
+    throw new AppError('unsupported_media_type')
   if (req.headers['content-encoding']) throw new AppError('unsupported_media_type')
   next()
 }
@@ -93,7 +94,8 @@ function parse<S extends z.ZodType>(schema: S, input: unknown, prefix: string): 
   if (result.success) return result.data
   const errors: FieldProblem[] = result.error.issues.slice(0, MAX_PROBLEMS).map(issue => ({
     path: [prefix, ...issue.path.map(String)].filter(part => part !== '').join('.'),
-    message: issue.code === 'unrecognized_keys' ? `Unknown: ${issue.keys.slice(0, 5).join(', ')}` : issue.message,
+    message:
+      issue.code === 'unrecognized_keys' ? `Unknown: ${issue.keys.slice(0, 5).join(', ')}` : issue.message,
   }))
   throw new AppError('invalid_input', { errors })
 }
@@ -102,7 +104,8 @@ function parse<S extends z.ZodType>(schema: S, input: unknown, prefix: string): 
 function refuseDeep(input: unknown) {
   let level: unknown[] = [input]
   for (let depth = 0; level.length > 0; depth++) {
-    if (depth > MAX_DEPTH) throw new AppError('invalid_input', { detail: 'This request is nested too deeply.' })
+    if (depth > MAX_DEPTH)
+      throw new AppError('invalid_input', { detail: 'This request is nested too deeply.' })
     level = level.flatMap(value => (value !== null && typeof value === 'object' ? Object.values(value) : []))
   }
 }

@@ -28,13 +28,19 @@ export function toOpenApi(routes: readonly AnyRoute[]) {
         })),
       ],
       ...(spec.body && {
-        requestBody: { required: true, content: { 'application/json': { schema: toSchema(spec.body, 'input') } } },
+        requestBody: {
+          required: true,
+          content: { 'application/json': { schema: toSchema(spec.body, 'input') } },
+        },
       }),
       responses: {
         ...Object.fromEntries(
           Object.entries(spec.replies).map(([status, schema]) => [
             status,
-            { description: 'As asked', content: { 'application/json': { schema: toSchema(schema, 'output') } } },
+            {
+              description: 'As asked',
+              content: { 'application/json': { schema: toSchema(schema, 'output') } },
+            },
           ]),
         ),
         default: {
@@ -46,7 +52,11 @@ export function toOpenApi(routes: readonly AnyRoute[]) {
   }
   return {
     openapi: '3.1.0',
-    info: { title: 'Tallykin', version: '1', description: 'Every route of the server, with who may call it.' },
+    info: {
+      title: 'Tallykin',
+      version: '1',
+      description: 'Every route of the server, with who may call it.',
+    },
     paths,
   }
 }
@@ -65,7 +75,10 @@ export function toAccessNames(access: Access): string[] {
 
 function queryParameters(spec: AnyRoute) {
   if (!spec.query) return []
-  const schema = toSchema(spec.query, 'input') as { properties?: Record<string, unknown>; required?: string[] }
+  const schema = toSchema(spec.query, 'input') as {
+    properties?: Record<string, unknown>
+    required?: string[]
+  }
   return Object.entries(schema.properties ?? {}).map(([name, property]) => ({
     name,
     in: 'query',
@@ -75,6 +88,10 @@ function queryParameters(spec: AnyRoute) {
 }
 
 function toSchema(schema: z.ZodType, io: 'input' | 'output') {
-  const { $schema: _, ...rest } = z.toJSONSchema(schema, { io, unrepresentable: 'any', target: 'draft-2020-12' })
+  const { $schema: _, ...rest } = z.toJSONSchema(schema, {
+    io,
+    unrepresentable: 'any',
+    target: 'draft-2020-12',
+  })
   return rest
 }

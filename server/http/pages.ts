@@ -1,7 +1,7 @@
 import type { Express, Request, RequestHandler, Response } from 'express'
 import type { ReceiptView } from '#shared/orders/contract.ts'
 import type { StoreView } from '#shared/stores/contract.ts'
-import { publicId, type Locale } from '#shared/wire.ts'
+import { type Locale, publicId } from '#shared/wire.ts'
 import type { Deps } from '../deps.ts'
 import { findReceipt } from '../orders/receipt-view.ts'
 import { findStoreView } from '../stores/store-view.ts'
@@ -55,7 +55,9 @@ export function mountPages(app: Express, deps: Deps, pages: PageBuild) {
   })
   app.get('/r/:receipt', async (req, res) => {
     const id = publicId.safeParse(req.params.receipt)
-    const view = id.success ? findReceipt(deps.db, { receipt: id.data, publicUrl: deps.config.publicUrl }) : null
+    const view = id.success
+      ? findReceipt(deps.db, { receipt: id.data, publicUrl: deps.config.publicUrl })
+      : null
     await sendPage(req, res, view ? { receipt: { id: id.data!, view } } : { notFound: true })
   })
   app.get(DESKS, async (req, res) => {

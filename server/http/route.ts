@@ -82,9 +82,11 @@ export type AnyRoute = Omit<RouteSpec, 'handler'> & {
 }
 
 /** Declares a route: contract, access and handler in one place. */
-export function route<P extends Schema = undefined, Q extends Schema = undefined, B extends Schema = undefined>(
-  spec: RouteSpec<P, Q, B>,
-): AnyRoute {
+export function route<
+  P extends Schema = undefined,
+  Q extends Schema = undefined,
+  B extends Schema = undefined,
+>(spec: RouteSpec<P, Q, B>): AnyRoute {
   return spec as unknown as AnyRoute
 }
 

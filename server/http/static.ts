@@ -1,6 +1,7 @@
 import { existsSync, readdirSync, readFileSync } from 'node:fs'
 import { extname, join } from 'node:path'
-import express, { type Express } from 'express'
+import type express from 'express'
+import type { Express } from 'express'
 import { AppError } from '#shared/errors.ts'
 import type { Deps } from '../deps.ts'
 import type { PageBuild } from './pages.ts'
@@ -27,7 +28,11 @@ export function mountStatic(app: Express, deps: Deps, pages: PageBuild) {
       file,
       {
         root: join(deps.config.dataDir, 'pictures'),
-        headers: { 'Cache-Control': IMMUTABLE, 'Content-Type': 'image/webp', 'Content-Disposition': 'inline' },
+        headers: {
+          'Cache-Control': IMMUTABLE,
+          'Content-Type': 'image/webp',
+          'Content-Disposition': 'inline',
+        },
         cacheControl: false,
         dotfiles: 'deny',
       },
@@ -57,7 +62,8 @@ function mountAssets(app: Express, dir: string) {
     const asset = assets.get(String(req.params.name))
     if (!asset) throw new AppError('not_found')
     const accepted = String(req.headers['accept-encoding'] ?? '')
-    const encoding = asset.br && /\bbr\b/.test(accepted) ? 'br' : asset.gz && /\bgzip\b/.test(accepted) ? 'gzip' : null
+    const encoding =
+      asset.br && /\bbr\b/.test(accepted) ? 'br' : asset.gz && /\bgzip\b/.test(accepted) ? 'gzip' : null
     res.setHeader('Content-Type', asset.type)
     res.setHeader('Cache-Control', IMMUTABLE)
     res.setHeader('Vary', 'Accept-Encoding')

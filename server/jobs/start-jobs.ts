@@ -35,7 +35,10 @@ function repeat(deps: Deps, name: string, pauseMs: number, work: () => Promise<v
       try {
         await work()
       } catch (error) {
-        deps.log.error({ job: name, error: (error as Error).message, stack: (error as Error).stack }, 'job failed')
+        deps.log.error(
+          { job: name, error: (error as Error).message, stack: (error as Error).stack },
+          'job failed',
+        )
       }
       if (stopped) return
       await new Promise<void>(resolve => {

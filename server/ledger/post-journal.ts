@@ -1,7 +1,7 @@
+import { sql } from 'drizzle-orm'
+import { prepared } from '../db/prepared.ts'
 import { ledgerEntry, ledgerJournal } from '../db/schema/ledger.ts'
 import type { Tx } from '../db/transaction.ts'
-import { prepared } from '../db/prepared.ts'
-import { sql } from 'drizzle-orm'
 
 /**
  * The chart of accounts. Cash is kept by holder: card money is with the operator, paper money with the

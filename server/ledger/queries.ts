@@ -14,9 +14,19 @@ export function trialBalance(tx: Tx, driveId: number): Record<Account, number> {
   ) as Record<Account, number>
   const sum = sql<number>`sum(${ledgerEntry.amountCents})`
   const ofDrive = eq(ledgerEntry.driveId, driveId)
-  for (const row of tx.select({ code: ledgerEntry.debit, sum }).from(ledgerEntry).where(ofDrive).groupBy(ledgerEntry.debit).all())
+  for (const row of tx
+    .select({ code: ledgerEntry.debit, sum })
+    .from(ledgerEntry)
+    .where(ofDrive)
+    .groupBy(ledgerEntry.debit)
+    .all())
     balance[row.code as Account] += row.sum
-  for (const row of tx.select({ code: ledgerEntry.credit, sum }).from(ledgerEntry).where(ofDrive).groupBy(ledgerEntry.credit).all())
+  for (const row of tx
+    .select({ code: ledgerEntry.credit, sum })
+    .from(ledgerEntry)
+    .where(ofDrive)
+    .groupBy(ledgerEntry.credit)
+    .all())
     balance[row.code as Account] -= row.sum
   return balance
 }

@@ -1,6 +1,6 @@
 import type { Relationship } from '#shared/orders/contract.ts'
+import { nextPrize } from '#shared/tally/tally.ts'
 import type { Deps } from '../deps.ts'
-import { refundById } from '../orders/refund-queries.ts'
 import {
   findCustomer,
   findOrder,
@@ -10,8 +10,8 @@ import {
   type OrderRow,
 } from '../orders/queries.ts'
 import { creditNames } from '../orders/receipt-view.ts'
+import { refundById } from '../orders/refund-queries.ts'
 import { getSeller } from '../sellers/queries.ts'
-import { nextPrize } from '#shared/tally/tally.ts'
 
 type MailLocale = 'en' | 'es'
 

@@ -1,8 +1,8 @@
 import { sql } from 'drizzle-orm'
-import { newPublicId } from '../ids.ts'
 import { prepared } from '../db/prepared.ts'
 import { outbox } from '../db/schema/mail.ts'
 import type { Tx } from '../db/transaction.ts'
+import { newPublicId } from '../ids.ts'
 
 export type LetterKind =
   | 'receipt'

@@ -74,7 +74,13 @@ async function sendOne(deps: Deps, id: number): Promise<boolean> {
     hit('F19')
     inTransaction(deps.db, tx => {
       tx.update(outbox)
-        .set({ state: 'sent', sentAt: deps.now(), response: response.slice(0, 300), leaseUntil: null, lastError: null })
+        .set({
+          state: 'sent',
+          sentAt: deps.now(),
+          response: response.slice(0, 300),
+          leaseUntil: null,
+          lastError: null,
+        })
         .where(and(eq(outbox.id, id), eq(outbox.state, 'sending')))
         .run()
     })
@@ -100,7 +106,8 @@ function claim(deps: Deps, id: number): OutboxRow | null {
 
 /** A refusal for good (5xx) or a template that fails goes to staff; everything else is tried again, later and later. */
 function putOff(deps: Deps, row: OutboxRow, error: Error & { responseCode?: number }) {
-  const forGood = (error.responseCode ?? 0) >= 500 || error.name === 'LetterError' || row.attempts >= MAX_ATTEMPTS
+  const forGood =
+    (error.responseCode ?? 0) >= 500 || error.name === 'LetterError' || row.attempts >= MAX_ATTEMPTS
   const wait = BACK_OFF_MS[Math.min(row.attempts - 1, BACK_OFF_MS.length - 1)] ?? 0
   inTransaction(deps.db, tx => {
     tx.update(outbox)

@@ -1,10 +1,10 @@
-import { inTransaction } from '../db/transaction.ts'
 import type { SessionState } from '../clients/payments.ts'
+import { inTransaction } from '../db/transaction.ts'
 import type { Deps } from '../deps.ts'
 import { expireOrder } from './expire-order.ts'
 import { findOrder } from './queries.ts'
+import { putAside, type Settled, settlePayment } from './settle-payment.ts'
 import { rememberSession } from './start-payment.ts'
-import { type Settled, putAside, settlePayment } from './settle-payment.ts'
 
 export type Applied = Settled | 'expired' | 'waiting' | 'unknown_order'
 

@@ -20,7 +20,13 @@ const addToTally = prepared(orm =>
       amountCents: place('amountCents'),
     })
     .onConflictDoUpdate({
-      target: [sellerTally.driveId, sellerTally.sellerId, sellerTally.code, sellerTally.channel, sellerTally.state],
+      target: [
+        sellerTally.driveId,
+        sellerTally.sellerId,
+        sellerTally.code,
+        sellerTally.channel,
+        sellerTally.state,
+      ],
       set: {
         quantity: sql`${sellerTally.quantity} + excluded.quantity`,
         marks: sql`${sellerTally.marks} + excluded.marks`,

@@ -35,7 +35,12 @@ const insertOrderRow = prepared(orm =>
 const insertCustomerRow = prepared(orm =>
   orm
     .insert(orderCustomer)
-    .values({ orderId: place('orderId'), name: place('name'), email: place('email'), relationship: place('relationship') })
+    .values({
+      orderId: place('orderId'),
+      name: place('name'),
+      email: place('email'),
+      relationship: place('relationship'),
+    })
     .prepare(),
 )
 const insertRecipientRow = prepared(orm =>

@@ -1,7 +1,7 @@
-import { allergenSentence } from '#shared/allergens/wording.ts'
 import type { AllergenStatement } from '#shared/allergens/allergens.ts'
+import { allergenSentence } from '#shared/allergens/wording.ts'
 import { foodTranslator } from '#shared/messages/food.ts'
-import { storageStatements, type StorageClass } from '#shared/storage/storage.ts'
+import { type StorageClass, storageStatements } from '#shared/storage/storage.ts'
 import type { OrderLineRow } from './queries.ts'
 
 type StatedLine = Pick<OrderLineRow, 'name' | 'contains' | 'containsNone' | 'mayContain' | 'storage'>

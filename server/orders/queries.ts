@@ -17,7 +17,11 @@ const byKey = prepared(orm =>
     .prepare(),
 )
 const byPublicId = prepared(orm =>
-  orm.select().from(order).where(eq(order.publicId, sql.placeholder('publicId'))).prepare(),
+  orm
+    .select()
+    .from(order)
+    .where(eq(order.publicId, sql.placeholder('publicId')))
+    .prepare(),
 )
 const linesOf = prepared(orm =>
   orm
@@ -28,10 +32,18 @@ const linesOf = prepared(orm =>
     .prepare(),
 )
 const customerOf = prepared(orm =>
-  orm.select().from(orderCustomer).where(eq(orderCustomer.orderId, sql.placeholder('orderId'))).prepare(),
+  orm
+    .select()
+    .from(orderCustomer)
+    .where(eq(orderCustomer.orderId, sql.placeholder('orderId')))
+    .prepare(),
 )
 const sessionOf = prepared(orm =>
-  orm.select().from(paymentSession).where(eq(paymentSession.orderId, sql.placeholder('orderId'))).prepare(),
+  orm
+    .select()
+    .from(paymentSession)
+    .where(eq(paymentSession.orderId, sql.placeholder('orderId')))
+    .prepare(),
 )
 
 export function findOrderByKey(tx: Tx, linkId: number, key: string): OrderRow | null {

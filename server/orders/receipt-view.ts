@@ -74,7 +74,11 @@ export function findReceipt(db: Db, options: { receipt: string; publicUrl: strin
 }
 
 /** By seller, the public name that a customer is told the credit goes to. */
-export function creditNames(db: Db, lines: { sellerId: number }[], organizationName: string): Map<number, string> {
+export function creditNames(
+  db: Db,
+  lines: { sellerId: number }[],
+  organizationName: string,
+): Map<number, string> {
   const sellers = listCreditedSellers(db.orm, [...new Set(lines.map(line => line.sellerId))])
   return new Map(
     sellers.map(seller => [seller.sellerId, publicName(seller) ?? seller.groupName ?? organizationName]),

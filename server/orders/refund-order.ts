@@ -13,7 +13,14 @@ import { newPublicId } from '../ids.ts'
 import { postJournal } from '../ledger/post-journal.ts'
 import { queueLetter } from '../mail/queue-letter.ts'
 import { listStaff } from '../people/queries.ts'
-import { findCustomer, findOrder, findOrderSetting, findSession, listLines, type OrderRow } from './queries.ts'
+import {
+  findCustomer,
+  findOrder,
+  findOrderSetting,
+  findSession,
+  listLines,
+  type OrderRow,
+} from './queries.ts'
 import { listOpenRefunds, listRefundLines, type RefundRow } from './refund-queries.ts'
 
 export type RefundRequest = {
@@ -54,7 +61,8 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
     .get()
   if (open)
     throw new AppError('conflict', {
-      detail: 'Another refund of this order is under way. Please look again in a moment; nothing was changed.',
+      detail:
+        'Another refund of this order is under way. Please look again in a moment; nothing was changed.',
     })
   const wanted =
     request.what === 'everything'
@@ -78,7 +86,8 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
     wanted: wanted.filter(line => line.quantity > 0),
     everything: request.what === 'everything',
   })
-  if (!decided.ok) throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
+  if (!decided.ok)
+    throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
 
   for (const line of decided.lines) {
     const { changes } = tx
@@ -95,14 +104,21 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
         ),
       )
       .run()
-    if (changes !== 1) throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
+    if (changes !== 1)
+      throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
   }
   const { changes } = tx
     .update(order)
     .set({ refundedCents: sql`${order.refundedCents} + ${decided.amountCents}` })
-    .where(and(eq(order.id, found.id), sql`${order.refundedCents} + ${decided.amountCents} <= ${order.totalCents}`))
+    .where(
+      and(
+        eq(order.id, found.id),
+        sql`${order.refundedCents} + ${decided.amountCents} <= ${order.totalCents}`,
+      ),
+    )
     .run()
-  if (changes !== 1) throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
+  if (changes !== 1)
+    throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
 
   const row = tx
     .insert(refund)
@@ -155,7 +171,8 @@ export async function finishRefund(deps: Deps, row: RefundRow): Promise<RefundRo
     })
   } catch (error) {
     if (!(error instanceof PaymentServiceError)) throw error
-    if (error.kind === 'refused' && error.code !== 'idempotency_key_in_use') return settleRefund(deps, row, null, 'failed')
+    if (error.kind === 'refused' && error.code !== 'idempotency_key_in_use')
+      return settleRefund(deps, row, null, 'failed')
     deps.log.warn({ refund: row.id, kind: error.kind }, 'refund not confirmed yet')
     return row
   }
@@ -164,8 +181,14 @@ export async function finishRefund(deps: Deps, row: RefundRow): Promise<RefundRo
 }
 
 /** Lets everything follow a refund that went through, or gives the reservation back when it failed. */
-export function settleRefund(deps: Deps, row: RefundRow, providerRefundId: string | null, status: string): RefundRow {
-  if (status === 'failed' || status === 'canceled') return inTransaction(deps.db, tx => undoRefund(deps, tx, row))
+export function settleRefund(
+  deps: Deps,
+  row: RefundRow,
+  providerRefundId: string | null,
+  status: string,
+): RefundRow {
+  if (status === 'failed' || status === 'canceled')
+    return inTransaction(deps.db, tx => undoRefund(deps, tx, row))
   return inTransaction(deps.db, tx => applyRefund(deps, tx, row, providerRefundId))
 }
 
@@ -289,7 +312,12 @@ function undoRefund(deps: Deps, tx: Tx, row: RefundRow): RefundRow {
       subject: `refund:${row.publicId}`,
       to: { name: admin.name, email: admin.email },
       locale: 'en',
-      facts: { notice: 'refund_failed', amountCents: row.amountCents, currency: found.currency, number: found.number },
+      facts: {
+        notice: 'refund_failed',
+        amountCents: row.amountCents,
+        currency: found.currency,
+        number: found.number,
+      },
       at: now,
     })
   return current

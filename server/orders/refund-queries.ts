@@ -38,7 +38,13 @@ export function listRefundLines(tx: Tx, refundId: number) {
 
 /** Refunds that were decided and of which the payment service's answer is not noted yet. */
 export function listOpenRefunds(tx: Tx) {
-  return tx.select().from(refund).where(eq(refund.state, 'requested')).orderBy(asc(refund.requestedAt)).limit(200).all()
+  return tx
+    .select()
+    .from(refund)
+    .where(eq(refund.state, 'requested'))
+    .orderBy(asc(refund.requestedAt))
+    .limit(200)
+    .all()
 }
 
 export function listRefundsOfOrder(tx: Tx, orderId: number) {

@@ -13,7 +13,13 @@ import { findOrder, findSession, type OrderRow } from './queries.ts'
  */
 export async function replaceOrder(deps: Deps, options: { old: string; by: OrderRow }) {
   const old = findOrder(deps.db.orm, options.old)
-  if (!old || old.linkId !== options.by.linkId || old.id === options.by.id || old.status !== 'awaiting_payment') return
+  if (
+    !old ||
+    old.linkId !== options.by.linkId ||
+    old.id === options.by.id ||
+    old.status !== 'awaiting_payment'
+  )
+    return
   inTransaction(deps.db, tx => {
     tx.update(order)
       .set({ replacedById: options.by.id })

@@ -129,7 +129,11 @@ export function putAside(tx: Tx, deps: Deps, aside: PuttingAside) {
     actor: 'payment_service',
     action: 'payment_put_aside',
     subject: `payment:${publicId}`,
-    after: { reason: aside.reason, amountCents: aside.session.amountTotalCents, currency: aside.session.currency },
+    after: {
+      reason: aside.reason,
+      amountCents: aside.session.amountTotalCents,
+      currency: aside.session.currency,
+    },
   })
   for (const admin of listStaff(tx, 'admin'))
     queueLetter(tx, {

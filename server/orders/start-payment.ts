@@ -4,7 +4,14 @@ import { paymentSession } from '../db/schema/payments.ts'
 import { inTransaction, type Tx } from '../db/transaction.ts'
 import type { Deps } from '../deps.ts'
 import { hit } from '../faults.ts'
-import { findCustomer, findOrderSetting, findSession, listLines, listRecipients, type OrderRow } from './queries.ts'
+import {
+  findCustomer,
+  findOrderSetting,
+  findSession,
+  listLines,
+  listRecipients,
+  type OrderRow,
+} from './queries.ts'
 
 /**
  * How long the payment page stays: the shortest the service allows is 30 minutes, counted by its own clock
@@ -18,7 +25,10 @@ export const PAYMENT_PAGE_MS = 31 * 60_000
  *
  * @throws AppError payment_service_unreachable or in_progress; the order stays as it is.
  */
-export async function startOrderPayment(deps: Deps, order: OrderRow): Promise<{ sessionId: string; url: string }> {
+export async function startOrderPayment(
+  deps: Deps,
+  order: OrderRow,
+): Promise<{ sessionId: string; url: string }> {
   const known = findSession(deps.db.orm, order.id)
   if (known) return known
   let session: SessionState
@@ -103,7 +113,10 @@ function toMetadata(
     name: customer?.name ?? '',
     relationship: customer?.relationship ?? '',
     locale: order.locale,
-    ...inPieces('lines', lines.map(line => `${line.code}x${line.quantity}@${place.get(line.recipientId)}`).join(' ')),
+    ...inPieces(
+      'lines',
+      lines.map(line => `${line.code}x${line.quantity}@${place.get(line.recipientId)}`).join(' '),
+    ),
     ...inPieces('for', labels),
   }
 }

@@ -62,7 +62,10 @@ export async function processEvent(deps: Deps, eventId: string): Promise<void> {
     const outcome = await act(deps, row.type, JSON.parse(row.facts) as Facts)
     finish(deps, eventId, outcome)
   } catch (error) {
-    deps.log.error({ event: eventId, type: row.type, error: (error as Error).message }, 'event not processed yet')
+    deps.log.error(
+      { event: eventId, type: row.type, error: (error as Error).message },
+      'event not processed yet',
+    )
     inTransaction(deps.db, tx => {
       tx.update(paymentEvent)
         .set({ attempts: row.attempts + 1 })
@@ -81,11 +84,14 @@ async function act(deps: Deps, type: string, facts: Facts): Promise<string> {
       if (!facts.session) return 'no session in it'
       // Events come in any order; what the service says now is what counts once the order might go backwards.
       const state =
-        type === 'checkout.session.expired' ? await deps.payments.getSession(facts.session.sessionId) : facts.session
+        type === 'checkout.session.expired'
+          ? await deps.payments.getSession(facts.session.sessionId)
+          : facts.session
       return applySession(deps, state)
     }
     default:
-      if (facts.paymentIntentId && findSessionByIntent(deps.db.orm, facts.paymentIntentId)) return `noted: ${type}`
+      if (facts.paymentIntentId && findSessionByIntent(deps.db.orm, facts.paymentIntentId))
+        return `noted: ${type}`
       return 'not for us'
   }
 }
@@ -104,7 +110,12 @@ export async function processOpenEvents(deps: Deps, options: { olderThanMs: numb
   const open = deps.db.orm
     .select({ eventId: paymentEvent.eventId })
     .from(paymentEvent)
-    .where(and(isNull(paymentEvent.processedAt), lt(paymentEvent.receivedAt, deps.now() - options.olderThanMs + 1)))
+    .where(
+      and(
+        isNull(paymentEvent.processedAt),
+        lt(paymentEvent.receivedAt, deps.now() - options.olderThanMs + 1),
+      ),
+    )
     .orderBy(asc(paymentEvent.receivedAt))
     .limit(200)
     .all()

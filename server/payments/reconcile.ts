@@ -31,7 +31,11 @@ export function makeReconciler(deps: Deps) {
       const stillWaiting = new Set(waiting.map(row => row.id))
       for (const id of askedAt.keys()) if (!stillWaiting.has(id)) askedAt.delete(id)
       const due = waiting
-        .filter(row => options.all || now - (askedAt.get(row.id) ?? 0) >= (now - row.placedAt < 300_000 ? 20_000 : 60_000))
+        .filter(
+          row =>
+            options.all ||
+            now - (askedAt.get(row.id) ?? 0) >= (now - row.placedAt < 300_000 ? 20_000 : 60_000),
+        )
         .slice(0, options.all ? undefined : PER_ROUND)
       for (let at = 0; at < due.length; at += AT_ONCE)
         await Promise.all(
@@ -62,7 +66,7 @@ async function bringUpToDate(deps: Deps, row: ReturnType<typeof listWaiting>[num
  */
 async function findLostPage(deps: Deps, publicId: string) {
   const order = findOrder(deps.db.orm, publicId)
-  if (!order || order.status !== 'awaiting_payment') return
+  if (order?.status !== 'awaiting_payment') return
   try {
     applySession(deps, await deps.payments.startPayment(toStartPayment(deps, order)))
   } catch (error) {

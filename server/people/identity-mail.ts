@@ -1,7 +1,7 @@
 import { eq, sql } from 'drizzle-orm'
+import type { Db } from '../db/open.ts'
 import { user } from '../db/schema/identity.ts'
 import { outbox } from '../db/schema/mail.ts'
-import type { Db } from '../db/open.ts'
 import { inTransaction } from '../db/transaction.ts'
 import { newPublicId } from '../ids.ts'
 import { queueLetter } from '../mail/queue-letter.ts'
@@ -13,7 +13,11 @@ const PER_HOUR = 5
 
 /** Queues the letters identity asks for. The answer to the visitor is the same whether one goes out or not. */
 export function makeIdentityMail(db: Db, now: () => number): IdentityMail {
-  const queue = (kind: 'password_reset' | 'sign_in_link', to: { email: string; name: string }, token: string) => {
+  const queue = (
+    kind: 'password_reset' | 'sign_in_link',
+    to: { email: string; name: string },
+    token: string,
+  ) => {
     inTransaction(db, tx => {
       const recent = tx
         .select({ n: sql<number>`count(*)` })

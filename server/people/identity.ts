@@ -54,7 +54,8 @@ export function makeIdentity(config: Config, db: Db, mail: IdentityMail) {
       maxPasswordLength: 128,
       resetPasswordTokenExpiresIn: RESET_MINUTES * 60,
       revokeSessionsOnPasswordReset: true,
-      sendResetPassword: async ({ user, token }) => mail.passwordReset({ email: user.email, name: user.name }, token),
+      sendResetPassword: async ({ user, token }) =>
+        mail.passwordReset({ email: user.email, name: user.name }, token),
     },
     session: { expiresIn: 7 * DAY_SECONDS, updateAge: DAY_SECONDS, freshAge: 15 * 60 },
     rateLimit: {
@@ -107,7 +108,7 @@ export function makeIdentity(config: Config, db: Db, mail: IdentityMail) {
     },
 
     /** Uses up a mailed sign-in link; the cookies to set, or null when the link is no good any more. */
-    async useSignInLink(req: Request, token: string): Promise<string[] | null> {
+    async consumeSignInLink(req: Request, token: string): Promise<string[] | null> {
       const answer = await auth.api.magicLinkVerify({
         query: { token },
         headers: fromNodeHeaders(req.headers),

@@ -1,10 +1,10 @@
 import { and, eq } from 'drizzle-orm'
 import type { DriveRole, StaffRole } from '#shared/people/contract.ts'
-import type { Tx } from '../db/transaction.ts'
 import { drive, organization } from '../db/schema/drives.ts'
 import { user } from '../db/schema/identity.ts'
 import { driveMember, guardian, staffMember } from '../db/schema/people.ts'
 import { seller, sellerPerson } from '../db/schema/sellers.ts'
+import type { Tx } from '../db/transaction.ts'
 
 export function listStaffRoles(tx: Tx, userId: string): StaffRole[] {
   return tx
@@ -61,9 +61,15 @@ export function mayUseSignInLink(tx: Tx, userId: string): boolean {
   const person = tx.select({ twoFactor: user.twoFactorEnabled }).from(user).where(eq(user.id, userId)).get()
   if (!person || person.twoFactor) return false
   if (listStaffRoles(tx, userId).length > 0) return false
-  const member = tx.select({ role: driveMember.role }).from(driveMember).where(eq(driveMember.userId, userId)).get()
+  const member = tx
+    .select({ role: driveMember.role })
+    .from(driveMember)
+    .where(eq(driveMember.userId, userId))
+    .get()
   if (member) return false
-  return tx.select({ id: guardian.sellerId }).from(guardian).where(eq(guardian.userId, userId)).get() !== undefined
+  return (
+    tx.select({ id: guardian.sellerId }).from(guardian).where(eq(guardian.userId, userId)).get() !== undefined
+  )
 }
 
 /** The desks of somebody, for the doors on their screen. */

@@ -17,7 +17,10 @@ export const peopleRoutes = [
       return reply(200, {
         name: person.name,
         email: person.email,
-        family: desks.family.map(({ firstName, lastName, ...row }) => ({ ...row, name: `${firstName} ${lastName}` })),
+        family: desks.family.map(({ firstName, lastName, ...row }) => ({
+          ...row,
+          name: `${firstName} ${lastName}`,
+        })),
         drives: desks.drives,
         staff: desks.staff,
       })
@@ -28,10 +31,12 @@ export const peopleRoutes = [
     path: '/sign-in/link',
     summary: 'Use up a mailed sign-in link; the mailed page asks for this with a button',
     access: { who: 'anyone' },
-    body: z.strictObject({ token: z.string().regex(/^[A-Za-z0-9_-]{16,128}$/, 'This link is not complete.') }),
+    body: z.strictObject({
+      token: z.string().regex(/^[A-Za-z0-9_-]{16,128}$/, 'This link is not complete.'),
+    }),
     replies: { 200: z.object({ signedIn: z.boolean() }) },
     async handler({ deps, body, request }) {
-      const cookies = await deps.identity.useSignInLink(request, body.token)
+      const cookies = await deps.identity.consumeSignInLink(request, body.token)
       if (!cookies)
         throw new AppError('invalid_input', {
           detail: 'This link was used already or is more than 10 minutes old. Please ask for a new one.',

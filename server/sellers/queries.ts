@@ -55,7 +55,9 @@ export function listCreditedOrders(tx: Tx, sellerId: number, limit: number) {
     .from(orderLine)
     .innerJoin(order, eq(order.id, orderLine.orderId))
     .innerJoin(orderCustomer, eq(orderCustomer.orderId, order.id))
-    .where(and(eq(orderLine.sellerId, sellerId), inArray(order.status, ['paid', 'partly_refunded', 'refunded'])))
+    .where(
+      and(eq(orderLine.sellerId, sellerId), inArray(order.status, ['paid', 'partly_refunded', 'refunded'])),
+    )
     .orderBy(desc(order.placedAt))
     .limit(limit)
     .all()

@@ -1,7 +1,7 @@
 import { z } from 'zod'
+import { storeStatus } from '#shared/deadline/store-status.ts'
 import type { OrderStatus, Relationship } from '#shared/orders/contract.ts'
 import { type SellerView, sellerReply } from '#shared/sellers/contract.ts'
-import { storeStatus } from '#shared/deadline/store-status.ts'
 import { nextPrize } from '#shared/tally/tally.ts'
 import { publicId } from '#shared/wire.ts'
 import type { Deps } from '../deps.ts'

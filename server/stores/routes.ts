@@ -19,7 +19,11 @@ export const storeRoutes = [
     query: storeQuery,
     replies: { 200: storeReply },
     handler({ deps, params, query }) {
-      const json = findStoreJson(deps.db, { token: params.token, locale: query.locale ?? 'en', now: deps.now() })
+      const json = findStoreJson(deps.db, {
+        token: params.token,
+        locale: query.locale ?? 'en',
+        now: deps.now(),
+      })
       if (json === null) throw new AppError('not_found')
       return reply(200, json, { 'Content-Type': 'application/json; charset=utf-8' })
     },
@@ -39,7 +43,10 @@ export const storeRoutes = [
         throw new AppError('invalid_input', {
           errors: [{ path: 'Idempotency-Key', message: 'Send an Idempotency-Key of 8 to 200 characters.' }],
         })
-      return reply(201, await placeOrder(deps, { token: params.token, key: key.data, input: body, requestId }))
+      return reply(
+        201,
+        await placeOrder(deps, { token: params.token, key: key.data, input: body, requestId }),
+      )
     },
   }),
 ]

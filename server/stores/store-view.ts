@@ -1,6 +1,6 @@
-import type { StoreView } from '#shared/stores/contract.ts'
 import { storeStatus } from '#shared/deadline/store-status.ts'
 import { DEFAULT_ORDER_LIMITS } from '#shared/pricing/limits.ts'
+import type { StoreView } from '#shared/stores/contract.ts'
 import type { Locale } from '#shared/wire.ts'
 import { type KeptCatalog, keptCatalog } from '../catalogs/kept-catalog.ts'
 import type { Db } from '../db/open.ts'
@@ -74,7 +74,10 @@ function catalogOf(db: Db, store: Store, locale: Locale, now: number): KeptCatal
 }
 
 /** What a store link shows, or null when there is nothing at it. */
-export function findStoreView(db: Db, options: { token: string; locale: Locale; now: number }): StoreView | null {
+export function findStoreView(
+  db: Db,
+  options: { token: string; locale: Locale; now: number },
+): StoreView | null {
   const store = findStore(db.orm, options.token)
   if (!store) return null
   const { categories, items } = catalogOf(db, store, options.locale, options.now)
@@ -82,7 +85,10 @@ export function findStoreView(db: Db, options: { token: string; locale: Locale; 
 }
 
 /** The same, serialised around the kept catalog: the read that every visitor of every store makes. */
-export function findStoreJson(db: Db, options: { token: string; locale: Locale; now: number }): string | null {
+export function findStoreJson(
+  db: Db,
+  options: { token: string; locale: Locale; now: number },
+): string | null {
   const store = findStore(db.orm, options.token)
   if (!store) return null
   const top = JSON.stringify(head(store, options.now))

@@ -2,7 +2,14 @@ import { eq } from 'drizzle-orm'
 import { closeInstant, resolveWallTime } from '#shared/deadline/wall-time.ts'
 import type { PlaceOrderRequest } from '#shared/orders/contract.ts'
 import type { DriveRole, StaffRole } from '#shared/people/contract.ts'
-import { catalog, catalogCategory, catalogItem, catalogItemText, catalogVersion, safetyRevision } from '../db/schema/catalogs.ts'
+import {
+  catalog,
+  catalogCategory,
+  catalogItem,
+  catalogItemText,
+  catalogVersion,
+  safetyRevision,
+} from '../db/schema/catalogs.ts'
 import { drive, driveTerms, organization } from '../db/schema/drives.ts'
 import { account, user } from '../db/schema/identity.ts'
 import { driveMember, guardian, staffMember } from '../db/schema/people.ts'
@@ -42,7 +49,10 @@ export function makeBuilders(deps: Deps) {
       .values({ catalogId: made.id, version: 1, publishedAt: now() })
       .returning()
       .get()
-    orm.insert(catalogCategory).values({ versionId: version.id, slug: 'soups', position: 1, nameEn: 'Soups', nameEs: 'Sopas' }).run()
+    orm
+      .insert(catalogCategory)
+      .values({ versionId: version.id, slug: 'soups', position: 1, nameEn: 'Soups', nameEs: 'Sopas' })
+      .run()
     return { catalogId: made.id, versionId: version.id }
   }
 
@@ -112,11 +122,17 @@ export function makeBuilders(deps: Deps) {
   function makeDrive(options: DriveOptions = {}) {
     const org = orm
       .insert(organization)
-      .values({ publicId: newPublicId(), name: options.organizationName ?? 'Saltmarsh High Robotics', createdAt: now() })
+      .values({
+        publicId: newPublicId(),
+        name: options.organizationName ?? 'Saltmarsh High Robotics',
+        createdAt: now(),
+      })
       .returning()
       .get()
     const ofCatalog = makeCatalog()
-    const items = (options.items ?? [{ code: '1204', name: 'Sweet corn chowder' }]).map(item => makeItem(ofCatalog, item))
+    const items = (options.items ?? [{ code: '1204', name: 'Sweet corn chowder' }]).map(item =>
+      makeItem(ofCatalog, item),
+    )
     const made = orm
       .insert(drive)
       .values({
@@ -176,7 +192,13 @@ export function makeBuilders(deps: Deps) {
       .get()
   }
 
-  type SellerOptions = { firstName?: string; lastName?: string; group?: { id: number }; nameShown?: boolean; number?: number }
+  type SellerOptions = {
+    firstName?: string
+    lastName?: string
+    group?: { id: number }
+    nameShown?: boolean
+    number?: number
+  }
 
   function makeSeller(of: Drive, options: SellerOptions = {}) {
     serial += 1
@@ -220,7 +242,10 @@ export function makeBuilders(deps: Deps) {
       .get()
   }
 
-  function makeLink(of: { id: number; driveId: number }, options: { state?: 'live' | 'paused' | 'replaced' } = {}) {
+  function makeLink(
+    of: { id: number; driveId: number },
+    options: { state?: 'live' | 'paused' | 'replaced' } = {},
+  ) {
     const state = options.state ?? 'live'
     return orm
       .insert(storeLink)
@@ -251,7 +276,14 @@ export function makeBuilders(deps: Deps) {
     const email = options.email ?? `person${serial}@example.org`
     orm
       .insert(user)
-      .values({ id, name: options.name ?? 'Sam Person', email, emailVerified: true, createdAt: at, updatedAt: at })
+      .values({
+        id,
+        name: options.name ?? 'Sam Person',
+        email,
+        emailVerified: true,
+        createdAt: at,
+        updatedAt: at,
+      })
       .run()
     return { id, email, name: options.name ?? 'Sam Person' }
   }

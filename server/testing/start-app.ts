@@ -6,8 +6,8 @@ import { pino } from 'pino'
 import { onTestFinished } from 'vitest'
 import { createApp } from '../app.ts'
 import type { Config } from '../config.ts'
-import { openDb } from '../db/open.ts'
 import { migrate } from '../db/migrate.ts'
+import { openDb } from '../db/open.ts'
 import type { Deps } from '../deps.ts'
 import type { PageBuild } from '../http/pages.ts'
 import { makeMailWorker } from '../mail/worker.ts'
@@ -129,7 +129,12 @@ export type Answer = { status: number; body: any; headers: Headers }
 
 /** Requests as a browser page of ours makes them, with an optional cookie. */
 export function makeApi(url: string, cookie?: string) {
-  const request = async (method: string, path: string, body?: unknown, headers: Record<string, string> = {}) => {
+  const request = async (
+    method: string,
+    path: string,
+    body?: unknown,
+    headers: Record<string, string> = {},
+  ) => {
     const response = await fetch(url + path, {
       method,
       redirect: 'manual',
@@ -143,11 +148,16 @@ export function makeApi(url: string, cookie?: string) {
     })
     const text = await response.text()
     const isJson = /json/.test(response.headers.get('content-type') ?? '')
-    return { status: response.status, body: isJson && text ? JSON.parse(text) : text, headers: response.headers } as Answer
+    return {
+      status: response.status,
+      body: isJson && text ? JSON.parse(text) : text,
+      headers: response.headers,
+    } as Answer
   }
   return {
     get: (path: string, headers?: Record<string, string>) => request('GET', path, undefined, headers),
-    post: (path: string, body?: unknown, headers?: Record<string, string>) => request('POST', path, body ?? {}, headers),
+    post: (path: string, body?: unknown, headers?: Record<string, string>) =>
+      request('POST', path, body ?? {}, headers),
     request,
     withCookie: (value: string) => makeApi(url, value),
   }

@@ -49,9 +49,13 @@ test('species must be named (21 U.S.C. 343(w)(2)): "tree nuts" fails, pecan and 
 })
 
 test('an empty list must be confirmed, not merely left blank', () => {
-  expect(statementProblems({ contains: [], containsNone: false, mayContain: [] })).toEqual(['unconfirmed_empty'])
+  expect(statementProblems({ contains: [], containsNone: false, mayContain: [] })).toEqual([
+    'unconfirmed_empty',
+  ])
   expect(statementProblems(statement(['tree_nut:coconut']))).toEqual(['unknown_allergen'])
-  expect(statementProblems({ contains: ['milk'], containsNone: true, mayContain: [] })).toEqual(['contradiction'])
+  expect(statementProblems({ contains: ['milk'], containsNone: true, mayContain: [] })).toEqual([
+    'contradiction',
+  ])
 })
 
 test('avoiding tree nuts covers every species, and by choice what may be in it', () => {
@@ -62,9 +66,23 @@ test('avoiding tree nuts covers every species, and by choice what may be in it',
   expect(isHidden(pie, ['fish'], { alsoMayContain: true })).toBe(false)
 })
 
+test('what is not known is hidden from everybody who avoids anything, and from nobody else', () => {
+  const unconfirmed = { contains: [], containsNone: false, mayContain: [] }
+  const unnamed = statement(['tree_nut'])
+  for (const unknown of [unconfirmed, unnamed]) {
+    expect(isHidden(unknown, ['milk'], { alsoMayContain: false })).toBe(true)
+    expect(isHidden(unknown, [], { alsoMayContain: true })).toBe(false)
+  }
+  expect(allergenSentence(unconfirmed, t, 'en')).toBe(
+    'Allergens are not stated. Please ask before you eat it.',
+  )
+})
+
 test('the statement of an order is the union over its lines', () => {
   const union = unionStatement([statement(['wheat'], ['milk', 'peanut']), statement(['milk', 'wheat'])])
   expect(union).toEqual({ contains: ['wheat', 'milk'], containsNone: false, mayContain: ['peanut'] })
+  expect(unionStatement([statement([]), statement([])])).toMatchObject({ containsNone: true })
+  expect(unionStatement([])).toMatchObject({ contains: [], containsNone: false })
 })
 
 test('every allergen has a name to be called by', () => {

@@ -77,8 +77,11 @@ export function unionStatement(statements: readonly AllergenStatement[]): Allerg
   const contains = sorted(statements.flatMap(statement => statement.contains))
   return {
     contains,
-    containsNone: contains.length === 0 && statements.every(statement => statement.containsNone),
-    mayContain: sorted(statements.flatMap(statement => statement.mayContain)).filter(name => !contains.includes(name)),
+    containsNone:
+      contains.length === 0 && statements.length > 0 && statements.every(statement => statement.containsNone),
+    mayContain: sorted(statements.flatMap(statement => statement.mayContain)).filter(
+      name => !contains.includes(name),
+    ),
   }
 }
 
@@ -100,12 +103,16 @@ export function statementProblems(statement: AllergenStatement): StatementProble
   return [...problems]
 }
 
-/** Whether somebody who avoids these majors does not want to see the item; "tree nuts" covers every species. */
+/**
+ * Whether somebody who avoids these majors does not want to see the item; "tree nuts" covers every species. A
+ * statement that cannot stand hides the item from everybody who avoids anything: what is unknown is not safe.
+ */
 export function isHidden(
   statement: AllergenStatement,
   avoid: readonly Major[],
   options: { alsoMayContain: boolean },
 ): boolean {
+  if (avoid.length > 0 && statementProblems(statement).length > 0) return true
   const names = options.alsoMayContain ? [...statement.contains, ...statement.mayContain] : statement.contains
   return names.some(name => isAllergen(name) && avoid.includes(majorOf(name)))
 }

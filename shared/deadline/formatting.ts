@@ -24,7 +24,7 @@ export function formatInstant(instant: number, zone: string, locale: Locale): st
     new Intl.DateTimeFormat(tags[locale], { timeZone: zone, ...options }).format(instant)
   const day = format({ weekday: 'long', month: 'long', day: 'numeric' })
   const time = format({ hour: 'numeric', minute: '2-digit', hour12: true })
-  return `${day}, ${lowerHalfDay(time)}`
+  return `${day}, ${lowerHalfDay(time, locale)}`
 }
 
 /** A short form for tables: "Nov 20, 4:12 pm". */
@@ -37,7 +37,7 @@ export function formatShortInstant(instant: number, zone: string, locale: Locale
     minute: '2-digit',
     hour12: true,
   }).format(instant)
-  return lowerHalfDay(text)
+  return lowerHalfDay(text, locale)
 }
 
 /** A deadline given by the first instant that is too late, read as the last minute that is in time. */
@@ -45,10 +45,14 @@ export function formatDeadline(closesAt: number, zone: string, locale: Locale): 
   return formatInstant(closesAt - 60_000, zone, locale)
 }
 
-/** "Eastern Standard Time" of a zone at an instant. */
+/** "Eastern time" of a zone at an instant; where clocks never change, "Mountain standard time". */
 export function zoneName(zone: string, instant: number, locale: Locale): string {
-  const parts = new Intl.DateTimeFormat(tags[locale], { timeZone: zone, timeZoneName: 'long' }).formatToParts(instant)
-  return parts.find(part => part.type === 'timeZoneName')?.value ?? zone
+  const parts = new Intl.DateTimeFormat(tags[locale], {
+    timeZone: zone,
+    timeZoneName: 'longGeneric',
+  }).formatToParts(instant)
+  const name = parts.find(part => part.type === 'timeZoneName')?.value ?? zone
+  return locale === 'en' ? name.replace(/( Standard)? Time$/, ending => ending.toLowerCase()) : name
 }
 
 /** Whether clocks in two zones read the same at an instant. */
@@ -56,7 +60,11 @@ export function sameOffset(zoneA: string, zoneB: string, instant: number): boole
   return formatInstant(instant, zoneA, 'en') === formatInstant(instant, zoneB, 'en')
 }
 
-/** The formatter puts a narrow space before AM; text written by hand puts a plain one and small letters. */
-function lowerHalfDay(text: string): string {
+/**
+ * The formatter puts a narrow space before AM; English written by hand puts a plain one and small letters.
+ * Spanish ("11:59 p.m.") already reads as written.
+ */
+function lowerHalfDay(text: string, locale: Locale): string {
+  if (locale !== 'en') return text
   return text.replace(/[\u202f\u00a0 ]([AP])\.?\s?M\.?$/i, (_all, half: string) => ` ${half.toLowerCase()}m`)
 }

@@ -1,10 +1,17 @@
 import fc from 'fast-check'
 import { expect, test } from 'vitest'
-import { isLastHour, type StoreTimes, storeStatus } from './store-status.ts'
+import { isLastHour, payableUntil, type StoreTimes, storeStatus } from './store-status.ts'
 import { closeInstant } from './wall-time.ts'
 
 function aStore(changes: Partial<StoreTimes> = {}): StoreTimes {
-  return { opensAt: 1_000, closesAt: 9_000, closedEarlyAt: null, linkPaused: false, launched: true, ...changes }
+  return {
+    opensAt: 1_000,
+    closesAt: 9_000,
+    closedEarlyAt: null,
+    linkPaused: false,
+    launched: true,
+    ...changes,
+  }
 }
 
 test.each([
@@ -57,4 +64,9 @@ test('the last hour is the hour before the close', () => {
   expect(isLastHour(3_600_000 * 5, 3_600_000 * 4)).toBe(true)
   expect(isLastHour(3_600_000 * 5, 3_600_000 * 4 - 1)).toBe(false)
   expect(isLastHour(3_600_000 * 5, 3_600_000 * 5)).toBe(false)
+})
+
+test('an order placed a millisecond before the close may be paid for thirty minutes', () => {
+  const closes = Date.parse('2026-11-21T05:00:00Z')
+  expect(payableUntil(closes - 1)).toBe(Date.parse('2026-11-21T05:29:59.999Z'))
 })

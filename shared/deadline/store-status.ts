@@ -9,8 +9,13 @@ export type StoreTimes = {
   launched: boolean
 }
 
-/** Minutes an order that was placed in time may still be paid. */
+/** Minutes an order that was placed in time may still be paid: the shortest the payment service allows. */
 export const SESSION_MINUTES = 30
+
+/** The first instant at which an order can no longer be paid; the close in between changes nothing. */
+export function payableUntil(placedAt: number): number {
+  return placedAt + SESSION_MINUTES * 60_000
+}
 
 /**
  * Whether a store is open at an instant: from the opening, before the close, not paused, not closed early.

@@ -1,6 +1,7 @@
 import fc from 'fast-check'
 import { expect, test } from 'vitest'
-import { closeInstant, localDay, resolveWallTime } from './wall-time.ts'
+import { addDays } from '../calendar.ts'
+import { closeInstant, isValidZone, localDay, resolveWallTime } from './wall-time.ts'
 
 const iso = (date: string, time: string, zone: string) => {
   const resolved = resolveWallTime({ date, time }, zone)
@@ -42,6 +43,46 @@ test.each([
   expect(iso(date, time, zone)).toBe(reason)
 })
 
+test('a day of a zone may have 23, 24 or 25 hours', () => {
+  const hours = (day: string, zone: string) => {
+    const [from, to] = [day, addDays(day, 1)].map(date => resolveWallTime({ date, time: '00:00' }, zone))
+    if (!from?.ok || !to?.ok) throw new Error('midnight exists here')
+    return (to.instant - from.instant) / 3_600_000
+  }
+  expect(hours('2026-11-01', 'America/New_York')).toBe(25)
+  expect(hours('2027-03-14', 'America/New_York')).toBe(23)
+  expect(hours('2026-11-01', 'America/Phoenix')).toBe(24)
+  expect(hours('2027-03-14', 'America/Phoenix')).toBe(24)
+})
+
+test.each([
+  'America/New_York',
+  'America/Indiana/Indianapolis',
+  'America/Kentucky/Louisville',
+  'America/North_Dakota/Center',
+  'America/Port-au-Prince',
+  'Pacific/Honolulu',
+  'Asia/Kolkata',
+])('%s is a zone', zone => {
+  expect(isValidZone(zone)).toBe(true)
+})
+
+test.each([
+  'US/Pacific-New',
+  'US/Pacific',
+  'EST',
+  'Etc/GMT+5',
+  '+05:00',
+  'america/new_york',
+  'America/New_york',
+  'America/Saltmarsh',
+  'America/',
+  '../New_York',
+  '',
+])('%j is no zone', zone => {
+  expect(isValidZone(zone)).toBe(false)
+})
+
 test('"closes 11:59 pm" shuts at the end of that minute', () => {
   expect(closeInstant({ date: '2026-11-01', time: '23:59' }, 'America/New_York')).toMatchObject({
     instant: Date.parse('2026-11-02T05:00:00Z'),
@@ -49,7 +90,13 @@ test('"closes 11:59 pm" shuts at the end of that minute', () => {
 })
 
 test('any resolved instant reads as the wall time that was asked for', () => {
-  const zones = fc.constantFrom('America/New_York', 'America/Phoenix', 'Pacific/Honolulu', 'America/St_Johns', 'Australia/Lord_Howe')
+  const zones = fc.constantFrom(
+    'America/New_York',
+    'America/Phoenix',
+    'Pacific/Honolulu',
+    'America/St_Johns',
+    'Australia/Lord_Howe',
+  )
   const minute = fc.integer({ min: 0, max: 365 * 24 * 60 })
   fc.assert(
     fc.property(zones, minute, (zone, offset) => {

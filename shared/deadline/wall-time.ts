@@ -9,11 +9,22 @@ export type Resolved =
 
 const HOUR_MS = 3_600_000
 
-const zones = new Set(Intl.supportedValuesOf('timeZone'))
+// Names by area and place. Abbreviations, offsets and the old national names ("US/Pacific") are not among them.
+const AREA_AND_PLACE =
+  /^(Africa|America|Antarctica|Arctic|Asia|Atlantic|Australia|Europe|Indian|Pacific)(\/[A-Z][A-Za-z_-]+){1,2}$/
 
-/** Whether a zone is one of the current names; old aliases, which may be dropped any day, are refused. */
+/**
+ * Whether a text is the name of a time zone as the IANA database spells it. The runtime's own list of names
+ * will not do: it holds America/Indianapolis where the database says America/Indiana/Indianapolis.
+ */
 export function isValidZone(zone: string): boolean {
-  return zones.has(zone)
+  if (!AREA_AND_PLACE.test(zone)) return false
+  try {
+    const { timeZone } = new Intl.DateTimeFormat('en-US', { timeZone: zone }).resolvedOptions()
+    return timeZone === zone || timeZone.toLowerCase() !== zone.toLowerCase()
+  } catch {
+    return false
+  }
 }
 
 /**

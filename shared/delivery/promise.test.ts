@@ -21,6 +21,12 @@ test.each([
   ['silence, exactly 30 days later', { newUntil: '2027-01-17' }, 'kept'],
   ['silence, 31 days later', { newUntil: '2027-01-18' }, 'awaiting'],
   ['silence, 31 days later, time is up', { newUntil: '2027-01-18', timeIsUp: true }, 'canceled'],
+  [
+    'a second notice back within the promise, time is up',
+    { newUntil: '2026-12-18', earlierDelays: 1, timeIsUp: true },
+    'kept',
+  ],
+  ['silence on a second delay, time left', { earlierDelays: 1 }, 'awaiting'],
   ['silence on a second delay', { earlierDelays: 1, timeIsUp: true }, 'canceled'],
   ['silence that the notice did not speak of', { noticeSaidSilenceKeeps: false, timeIsUp: true }, 'canceled'],
 ])('%s: the order is %s', (_what, changes, outcome) => {

@@ -20,12 +20,13 @@ export type Delay = {
 const SILENCE_DAYS = 30
 
 /**
- * What becomes of an order whose delivery moves later. The customer's answer decides; silence keeps the order
+ * What becomes of an order whose delivery moves. Within the promised window nothing is late and the order stands. The customer's answer decides; silence keeps the order
  * only for a first delay within 30 days of the promise, if the notice said so, else it cancels and refunds.
  */
 export function delayOutcome(delay: Delay): 'kept' | 'canceled' | 'awaiting' {
   if (delay.answer === 'keep') return 'kept'
   if (delay.answer === 'cancel') return 'canceled'
+  if (daysBetween(delay.promisedUntil, delay.newUntil) <= 0) return 'kept'
   if (silenceKeeps(delay)) return 'kept'
   return delay.timeIsUp ? 'canceled' : 'awaiting'
 }

@@ -34,5 +34,7 @@ export const driveReply = z.object({
 export type DriveView = z.infer<typeof driveReply>
 
 /** Closing early takes a reason, which the activity log keeps. */
-export const closeEarlyBody = z.strictObject({ reason: z.string().trim().min(3, 'Say why, in a few words.').max(300) })
+export const closeEarlyBody = z.strictObject({
+  reason: z.string().trim().min(3, 'Say why, in a few words.').max(300),
+})
 export const closeEarlyReply = z.object({ closedAt: instant, awaitingPayment: z.int() })

@@ -11,10 +11,17 @@ export function cardFee(chargeCents: number, terms: FeeTerms): number {
 
 export type CoveredCharge = { chargeCents: number; coverCents: number; feeCents: number }
 
-/** The smallest charge that leaves `netCents` after its own fee: what a customer pays who covers the fee. */
+/**
+ * The smallest charge that leaves `netCents` after its own fee: what a customer pays who covers the fee.
+ *
+ * @throws RangeError for a rate of 100% or more, which no charge can cover.
+ */
 export function chargeToCover(netCents: number, terms: FeeTerms): CoveredCharge {
   if (netCents === 0) return { chargeCents: 0, coverCents: 0, feeCents: 0 }
-  let charge = Math.max(0, Math.floor(((netCents + terms.fixedCents) * 10_000) / (10_000 - terms.rateBp)) - 2)
+  if (terms.rateBp >= 10_000) throw new RangeError('a fee of 100% or more cannot be covered')
+  // Rounding takes at most half a cent off the fee, so the answer lies at or above this; from here it is a few steps.
+  const least = Math.floor(((netCents + terms.fixedCents - 1) * 10_000) / (10_000 - terms.rateBp))
+  let charge = Math.max(0, least - 1)
   while (charge - cardFee(charge, terms) < netCents) charge += 1
   return { chargeCents: charge, coverCents: charge - netCents, feeCents: cardFee(charge, terms) }
 }

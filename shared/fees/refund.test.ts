@@ -47,7 +47,43 @@ test('with a gift on the order, giving back every item leaves gift and cover', (
     { lineId: 2, quantity: 2 },
   ]
   expect(refundAmount({ order, wanted: all, everything: false })).toMatchObject({ amountCents: 5000 })
-  expect(refundAmount({ order, wanted: all, everything: true })).toMatchObject({ amountCents: 5680, giftCents: 500 })
+  expect(refundAmount({ order, wanted: all, everything: true })).toMatchObject({
+    amountCents: 5680,
+    giftCents: 500,
+  })
+})
+
+test('everything that is left after a line of 10.00 is 41.80, and then nothing is left to give back', () => {
+  const order = fiftyPaidAsFiftyOneEighty()
+  order.lines[0] = { ...order.lines[0]!, refundedQuantity: 1, refundedCents: 1000 }
+  order.refundedCents = 1000
+  const rest = [{ lineId: 2, quantity: 2 }]
+  expect(refundAmount({ order, wanted: rest, everything: true })).toMatchObject({ amountCents: 4180 })
+  order.lines[1] = { ...order.lines[1]!, refundedQuantity: 2, refundedCents: 4000 }
+  order.refundedCents = 5180
+  expect(refundAmount({ order, wanted: [], everything: true })).toEqual({ ok: false })
+})
+
+test('"everything" that leaves a piece out is refused: the cover goes back only with all of it', () => {
+  const wanted = [{ lineId: 1, quantity: 1 }]
+  expect(refundAmount({ order: fiftyPaidAsFiftyOneEighty(), wanted, everything: true })).toEqual({
+    ok: false,
+  })
+})
+
+test('a line never gives back more than was paid for it, also when money went back without a piece', () => {
+  const order = fiftyPaidAsFiftyOneEighty()
+  order.lines[1] = { ...order.lines[1]!, refundedCents: 1000 }
+  order.refundedCents = 1000
+  const piece = (quantity: number) => ({ order, wanted: [{ lineId: 2, quantity }], everything: false })
+  expect(refundAmount(piece(1))).toMatchObject({ ok: true, amountCents: 2000 })
+  expect(refundAmount(piece(2))).toEqual({ ok: false })
+})
+
+test('a gift without items goes back as a whole', () => {
+  const order = { lines: [], giftCents: 2000, coverCents: 91, totalCents: 2091, refundedCents: 0 }
+  expect(refundAmount({ order, wanted: [], everything: true })).toMatchObject({ amountCents: 2091 })
+  expect(refundAmount({ order, wanted: [], everything: false })).toEqual({ ok: false })
 })
 
 test.each([
@@ -64,7 +100,9 @@ test.each([
     ],
   ],
 ])('%s is refused', (_what, wanted) => {
-  expect(refundAmount({ order: fiftyPaidAsFiftyOneEighty(), wanted, everything: false })).toEqual({ ok: false })
+  expect(refundAmount({ order: fiftyPaidAsFiftyOneEighty(), wanted, everything: false })).toEqual({
+    ok: false,
+  })
 })
 
 test('piece after piece, a line gives back exactly its price and its tax', () => {

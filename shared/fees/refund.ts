@@ -27,7 +27,7 @@ export type DecidedRefund = {
 /**
  * What giving back so many of certain lines returns: their price and their share of the tax. Only when nothing
  * of the order is left do the gift and the fee cover go back as well. `ok` is false when more is asked for than
- * is left, or nothing at all.
+ * is left, or nothing at all, or when `everything` is said but a piece is left out.
  */
 export function refundAmount(request: {
   order: RefundableOrder
@@ -41,20 +41,18 @@ export function refundAmount(request: {
     if (!line || quantity <= 0 || !Number.isInteger(quantity)) return { ok: false }
     if (lines.some(chosen => chosen.id === lineId)) return { ok: false }
     if (line.refundedQuantity + quantity > line.quantity) return { ok: false }
-    lines.push({
-      id: lineId,
-      quantity,
-      amountCents: quantity * line.unitPriceCents,
-      taxCents: taxOfPieces(line, quantity),
-    })
+    const amountCents = quantity * line.unitPriceCents
+    const taxCents = taxOfPieces(line, quantity)
+    const paidCents = line.quantity * line.unitPriceCents + line.taxCents
+    if (line.refundedCents + amountCents + taxCents > paidCents) return { ok: false }
+    lines.push({ id: lineId, quantity, amountCents, taxCents })
   }
-  const leavesNothing =
-    everything ||
-    (order.giftCents === 0 &&
-      order.lines.every(line => {
-        const now = lines.find(chosen => chosen.id === line.id)?.quantity ?? 0
-        return line.refundedQuantity + now === line.quantity
-      }))
+  const everyPiece = order.lines.every(line => {
+    const now = lines.find(chosen => chosen.id === line.id)?.quantity ?? 0
+    return line.refundedQuantity + now === line.quantity
+  })
+  if (everything && !everyPiece) return { ok: false }
+  const leavesNothing = everyPiece && (everything || order.giftCents === 0)
   const giftCents = everything ? order.giftCents : 0
   const coverCents = leavesNothing ? order.coverCents : 0
   const amountCents =

@@ -8,7 +8,10 @@ export type Translate<Key extends string = string> = (key: Key, values?: Record<
  * A translator over compiled messages. A key without a message is a mistake of ours, and stops a test; a reader
  * sees the key rather than nothing.
  */
-export function makeTranslator<Key extends string = string>(locale: Locale, messages: Messages): Translate<Key> {
+export function makeTranslator<Key extends string = string>(
+  locale: Locale,
+  messages: Messages,
+): Translate<Key> {
   const i18n = setupI18n({ locale, messages: { [locale]: messages } })
   return (key, values) => i18n._(key, values)
 }

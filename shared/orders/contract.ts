@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import { cleanText, isEmailAddress } from '../text.ts'
 import { cents, day, instant, locale, publicId } from '../wire.ts'
+import { relationshipNames } from './relationships.ts'
 
 /** Text a person typed: normalised, trimmed, without control or direction-changing characters. */
 function typed(max: number, min = 1) {
@@ -18,17 +19,7 @@ function typed(max: number, min = 1) {
   })
 }
 
-export const relationships = [
-  'parent',
-  'grandparent',
-  'relative',
-  'neighbor',
-  'friend',
-  'coworker',
-  'school_staff',
-  'other',
-] as const
-export const relationship = z.enum(relationships)
+export const relationship = z.enum(relationshipNames)
 export type Relationship = z.infer<typeof relationship>
 
 export const placeOrderBody = z.strictObject({
@@ -57,7 +48,9 @@ export type PlaceOrderInput = z.infer<typeof placeOrderBody>
 /** What the browser sends, before cleaning. */
 export type PlaceOrderRequest = z.input<typeof placeOrderBody>
 
-export const idempotencyKey = z.string().regex(/^[\x21-\x7e]{8,200}$/, 'Send an Idempotency-Key of 8 to 200 characters.')
+export const idempotencyKey = z
+  .string()
+  .regex(/^[\x21-\x7e]{8,200}$/, 'Send an Idempotency-Key of 8 to 200 characters.')
 
 export const placeOrderReply = z.object({
   orderNumber: z.string(),
@@ -67,7 +60,14 @@ export const placeOrderReply = z.object({
 })
 export type PlacedOrder = z.infer<typeof placeOrderReply>
 
-export const orderStatus = z.enum(['awaiting_payment', 'paid', 'partly_refunded', 'refunded', 'canceled', 'expired'])
+export const orderStatus = z.enum([
+  'awaiting_payment',
+  'paid',
+  'partly_refunded',
+  'refunded',
+  'canceled',
+  'expired',
+])
 export type OrderStatus = z.infer<typeof orderStatus>
 
 export const receiptLine = z.object({

@@ -5,10 +5,13 @@ import { addDays, daysBetween } from '../calendar.ts'
  * have passed. An estimate, which reads low until paper forms are keyed; never shown to customers.
  */
 export function paceEstimate(drive: {
+  /** Items by local day; a day without any may be missing. */
   byDay: ReadonlyMap<string, number>
+  /** The first full local day of selling. */
   firstDay: string
   today: string
   lastDay: string
+  /** Items so far, today's included. */
   current: number
 }): number | null {
   if (daysBetween(drive.firstDay, drive.today) < 3) return null

@@ -86,20 +86,25 @@ test('the total is the sum of its parts, and the lines sum up to the items and t
   })
   const basis = fc.constantFrom('order' as const, 'line' as const)
   fc.assert(
-    fc.property(fc.array(line, { minLength: 1, maxLength: 20 }), basis, fc.boolean(), (lines, chosen, coverFee) => {
-      const priced = priceOrder(
-        aRequest({
-          lines,
-          coverFee,
-          giftCents: 300,
-          tax: { mode: 'added', basis: chosen, ratesPpm: { food: 62_500, sweets: 79_750 } },
-        }),
-      )
-      if (!priced.ok) throw new Error('should be priced')
-      const { order } = priced
-      expect(order.totalCents).toBe(order.itemsCents + order.giftCents + order.taxCents + order.coverCents)
-      expect(order.lines.reduce((all, l) => all + l.amountCents, 0)).toBe(order.itemsCents)
-      expect(order.lines.reduce((all, l) => all + l.taxCents, 0)).toBe(order.taxCents)
-    }),
+    fc.property(
+      fc.array(line, { minLength: 1, maxLength: 20 }),
+      basis,
+      fc.boolean(),
+      (lines, chosen, coverFee) => {
+        const priced = priceOrder(
+          aRequest({
+            lines,
+            coverFee,
+            giftCents: 300,
+            tax: { mode: 'added', basis: chosen, ratesPpm: { food: 62_500, sweets: 79_750 } },
+          }),
+        )
+        if (!priced.ok) throw new Error('should be priced')
+        const { order } = priced
+        expect(order.totalCents).toBe(order.itemsCents + order.giftCents + order.taxCents + order.coverCents)
+        expect(order.lines.reduce((all, l) => all + l.amountCents, 0)).toBe(order.itemsCents)
+        expect(order.lines.reduce((all, l) => all + l.taxCents, 0)).toBe(order.taxCents)
+      },
+    ),
   )
 })

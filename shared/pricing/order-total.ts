@@ -58,7 +58,8 @@ export function priceOrder(
   const net = itemsCents + giftCents + taxCents
   const coverCents = request.coverFee ? chargeToCover(net, request.fee).coverCents : 0
   const totalCents = net + coverCents
-  if (totalCents > limits.maxOrderCents) return { ok: false, problems: [{ path: 'lines', code: 'order_too_large' }] }
+  if (totalCents > limits.maxOrderCents)
+    return { ok: false, problems: [{ path: 'lines', code: 'order_too_large' }] }
   return {
     ok: true,
     order: {
@@ -82,7 +83,8 @@ function findProblems({ lines, giftCents, limits }: PricingRequest): PricingProb
     if (!Number.isInteger(line.quantity) || line.quantity < 1 || line.quantity > limits.maxLineQuantity)
       problems.push({ path: `lines.${place}.quantity`, code: 'quantity_out_of_range' })
   })
-  if (sum(lines.map(line => line.quantity)) > limits.maxItems) problems.push({ path: 'lines', code: 'too_many_items' })
+  if (sum(lines.map(line => line.quantity)) > limits.maxItems)
+    problems.push({ path: 'lines', code: 'too_many_items' })
   const giftFits =
     giftCents === 0 ||
     (Number.isInteger(giftCents) && giftCents >= limits.minGiftCents && giftCents <= limits.maxGiftCents)

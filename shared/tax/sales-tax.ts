@@ -35,7 +35,8 @@ export type TaxableLine = { amountCents: number; taxCategory: string }
 /** Added tax of an order's lines, by the basis the terms choose; computed per order it is shared over the lines. */
 export function taxLines(lines: readonly TaxableLine[], terms: TaxTerms): number[] {
   if (terms.mode !== 'added') return lines.map(() => 0)
-  const rateOf = (line: TaxableLine) => terms.ratesPpm[line.taxCategory] ?? 0
+  const rates = new Map(Object.entries(terms.ratesPpm))
+  const rateOf = (line: TaxableLine) => rates.get(line.taxCategory) ?? 0
   if (terms.basis === 'line') return lines.map(line => taxOn(line.amountCents, rateOf(line)))
   const taxes = lines.map(() => 0)
   for (const rate of new Set(lines.map(rateOf))) {

@@ -87,6 +87,9 @@ export const driveTerms = sqliteTable(
     check('drive_terms_share', sql`${t.shareBp} between 0 and 10000`),
     check('drive_terms_window', sql`${t.deliveryFrom} <= ${t.deliveryTo}`),
     check('drive_terms_seller_of_record', sql`${t.sellerOfRecord} in ('organization', 'operator')`),
-    check('drive_terms_prizes', sql`${t.prizeEvery} > 0 and ${t.prizesBorneBy} in ('organization', 'operator')`),
+    check(
+      'drive_terms_prizes',
+      sql`${t.prizeEvery} > 0 and ${t.prizesBorneBy} in ('organization', 'operator')`,
+    ),
   ],
 )

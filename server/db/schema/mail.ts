@@ -31,6 +31,9 @@ export const outbox = sqliteTable(
     index('outbox_due').on(t.nextAttemptAt).where(sql`${t.state} in ('waiting', 'sending')`),
     index('outbox_failed').on(t.createdAt).where(sql`${t.state} = 'failed'`),
     check('outbox_state', sql`${t.state} in ('waiting', 'sending', 'sent', 'failed')`),
-    check('outbox_sent', sql`(${t.state} = 'sent') = (${t.sentAt} is not null and ${t.response} is not null)`),
+    check(
+      'outbox_sent',
+      sql`(${t.state} = 'sent') = (${t.sentAt} is not null and ${t.response} is not null)`,
+    ),
   ],
 )

@@ -160,7 +160,10 @@ export const sellerTally = sqliteTable(
     index('seller_tally_seller').on(t.sellerId, t.state),
     check('seller_tally_channel', sql`${t.channel} in ('online', 'paper')`),
     check('seller_tally_state', sql`${t.state} in ('credited', 'provisional')`),
-    check('seller_tally_never_negative', sql`${t.quantity} >= 0 and ${t.amountCents} >= 0 and ${t.marks} >= 0`),
+    check(
+      'seller_tally_never_negative',
+      sql`${t.quantity} >= 0 and ${t.amountCents} >= 0 and ${t.marks} >= 0`,
+    ),
   ],
 )
 
