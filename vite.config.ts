@@ -16,7 +16,6 @@ export default defineConfig({
     assetsInlineLimit: 0,
     rollupOptions: { input: ['web/main-store.tsx', 'web/main-desk.tsx'] },
   },
-  ssr: { noExternal: true },
   test: {
     include: ['{shared,server,emails,web,fakes}/**/*.test.{ts,tsx}'],
     pool: 'forks',

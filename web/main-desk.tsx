@@ -7,6 +7,9 @@ import { deskRoutes } from './app/desk-routes.tsx'
 import { ApiError } from './lib/api.ts'
 import { WordsProvider } from './lib/i18n.tsx'
 
+// The dialog's scroll lock adds a style element and asks here for the page's nonce.
+Object.assign(globalThis, { __webpack_nonce__: document.querySelector<HTMLElement>('script[nonce]')?.nonce })
+
 const client = new QueryClient({
   defaultOptions: {
     queries: {

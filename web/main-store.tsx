@@ -7,6 +7,9 @@ import type { Locale } from '#shared/wire.ts'
 import { routeIdOf, storeRoutes } from './app/store-routes.tsx'
 import { WordsProvider } from './lib/i18n.tsx'
 
+// The dialog's scroll lock adds a style element and asks here for the page's nonce.
+Object.assign(globalThis, { __webpack_nonce__: document.querySelector<HTMLElement>('script[nonce]')?.nonce })
+
 const state = JSON.parse(document.getElementById('state')?.textContent ?? '{}') as {
   queries: DehydratedState
   notFound: boolean

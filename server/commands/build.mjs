@@ -68,7 +68,6 @@ async function buildNode() {
     outdir: dist,
     chunkNames: 'server/chunks/[name]-[hash]',
     logLevel: 'warning',
-    define: { 'process.env.NODE_ENV': '"production"' },
   })
 }
 

@@ -314,7 +314,7 @@ export const winterLarder: DemoItem[] = [
     code: '3507',
     category: 'dumplings',
     priceCents: 1600,
-    netWeightG: 794,
+    netWeightG: 793,
     printedWeight: '28 oz',
     casePack: 12,
     volumeMl: 1600,

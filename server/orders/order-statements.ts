@@ -1,7 +1,7 @@
 import type { AllergenStatement } from '#shared/allergens/allergens.ts'
 import { allergenSentence } from '#shared/allergens/wording.ts'
 import { foodTranslator } from '#shared/messages/food.ts'
-import { type StorageClass, storageStatements } from '#shared/storage/storage.ts'
+import { type StorageClass, unionStorage } from '#shared/storage/storage.ts'
 import type { OrderLineRow } from './queries.ts'
 
 type StatedLine = Pick<OrderLineRow, 'name' | 'contains' | 'containsNone' | 'mayContain' | 'storage'>
@@ -18,9 +18,9 @@ export function orderStatements(lines: readonly StatedLine[], locale: 'en' | 'es
     }
     stated.set(line.name, allergenSentence(statement, t, locale))
   }
-  const keys = new Set(lines.flatMap(line => storageStatements(line.storage as StorageClass)))
+  const keys = unionStorage(lines.map(line => line.storage as StorageClass))
   return {
     allergens: [...stated].map(([name, text]) => ({ name, text })),
-    storage: [...keys].map(key => t(key)),
+    storage: keys.map(key => t(key)),
   }
 }

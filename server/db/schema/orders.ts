@@ -2,6 +2,7 @@ import { sql } from 'drizzle-orm'
 import { check, index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import { catalogItem } from './catalogs.ts'
 import { drive, driveTerms } from './drives.ts'
+import { user } from './identity.ts'
 import { seller, storeLink } from './sellers.ts'
 
 export const order = sqliteTable(
@@ -182,4 +183,36 @@ export const driveDay = sqliteTable(
     refundedCents: integer().notNull(),
   },
   t => [primaryKey({ columns: [t.driveId, t.day] })],
+)
+
+/** A family does not know who ordered. The organizer decides; the goods are held until then. */
+export const orderFlag = sqliteTable(
+  'order_flag',
+  {
+    id: integer().primaryKey(),
+    publicId: text().notNull().unique(),
+    orderId: integer()
+      .notNull()
+      .references(() => order.id),
+    sellerId: integer()
+      .notNull()
+      .references(() => seller.id),
+    raisedBy: text()
+      .notNull()
+      .references(() => user.id),
+    note: text().notNull(),
+    raisedAt: integer().notNull(),
+    resolvedAt: integer(),
+    resolvedBy: text().references(() => user.id),
+    resolution: text(),
+  },
+  t => [
+    uniqueIndex('order_flag_one_open').on(t.orderId, t.sellerId).where(sql`${t.resolvedAt} is null`),
+    index('order_flag_open').on(t.raisedAt).where(sql`${t.resolvedAt} is null`),
+    check(
+      'order_flag_resolution',
+      sql`${t.resolution} is null or ${t.resolution} in ('known', 'moved', 'refunded')`,
+    ),
+    check('order_flag_resolved', sql`(${t.resolvedAt} is null) = (${t.resolution} is null)`),
+  ],
 )

@@ -11,6 +11,7 @@ import { StoreHead } from '../../features/store/store-head.tsx'
 import { StoreState } from '../../features/store/store-state.tsx'
 import { useServerNow } from '../../features/store/use-server-now.ts'
 import { useWords } from '../../lib/i18n.tsx'
+import { useWide } from '../../lib/use-wide.ts'
 import { Notice } from '../../ui/notice.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
 import { NotFoundPage } from '../not-found-page.tsx'
@@ -23,6 +24,7 @@ export function StorePage() {
   const { data: view, refetch } = useQuery(storeQuery(token))
   const now = useServerNow(view?.serverNow ?? '1970-01-01T00:00:00Z')
   const { pad, change } = usePad(token)
+  const wide = useWide()
 
   // The page notices the close and the opening by itself, without waiting for its regular look.
   const boundary = view && view.drive.status === 'open' && now >= Date.parse(view.drive.closesAt)
@@ -59,13 +61,9 @@ export function StorePage() {
             isOpen ? (item, quantity) => change(now => setQuantity(now, item.code, quantity)) : null
           }
         />
-        {isOpen && (
-          <div>
-            <PadBeside {...padProps} />
-          </div>
-        )}
+        {isOpen && <div>{wide !== false && <PadBeside {...padProps} />}</div>}
       </main>
-      {isOpen && <PadBar {...padProps} />}
+      {isOpen && wide !== true && <PadBar {...padProps} />}
     </>
   )
 }
