@@ -4,7 +4,7 @@ import type { Relationship } from '#shared/orders/contract.ts'
 import type { Locale } from '#shared/wire.ts'
 import { Action } from './parts/action.tsx'
 import { FactsTable } from './parts/facts-table.tsx'
-import { isolated, literalFacts, oneLine } from './parts/literal.ts'
+import { isolated, literalFacts, subjectLine } from './parts/literal.ts'
 import { OrderTable } from './parts/order-table.tsx'
 import { Perforation } from './parts/perforation.tsx'
 import { blocks, heading, indented, linkLines } from './parts/plain-text.ts'
@@ -42,7 +42,7 @@ function sayings(mail: GuardianNotice) {
   return {
     t,
     locale,
-    subject: oneLine(t('guardian.subject', who)),
+    subject: subjectLine(t('guardian.subject', who)),
     title: t('guardian.title', who),
     preview: t('guardian.preview', { tally: mail.tallyNow }),
     facts: [

@@ -2,7 +2,7 @@ import { formatDay, formatDays } from '#shared/deadline/formatting.ts'
 import { formatAmount, formatMoney } from '#shared/money.ts'
 import { foodFacts } from './food-facts.ts'
 import { fullDay, percentOf } from './parts/formats.ts'
-import { oneLine } from './parts/literal.ts'
+import { subjectLine } from './parts/literal.ts'
 import { wordsFor } from './parts/words.ts'
 import type { ReceiptMail } from './receipt.tsx'
 
@@ -17,8 +17,13 @@ export function receiptFacts(mail: ReceiptMail) {
   const count = mail.lines.reduce((sum, line) => sum + line.quantity, 0)
   const total = money(mail.totalCents)
   const days = formatDays(mail.deliveryFrom, mail.deliveryTo, locale)
-  const isGroup = mail.creditedTo === organization
-  const credit = isGroup ? organization : `${mail.creditedTo}, ${organization}`
+  const credit =
+    mail.creditedTo === organization
+      ? t('receipt.creditOrganization', { organization })
+      : t('receipt.creditSeller', { credit: mail.creditedTo, organization })
+  const paid = t('receipt.intro', { credit: mail.creditedTo, count })
+  const gift =
+    mail.giftCents > 0 ? t('receipt.introAndGift', { gift: money(mail.giftCents), organization }) : ''
   return {
     words,
     money,
@@ -27,18 +32,17 @@ export function receiptFacts(mail: ReceiptMail) {
     count,
     /** False for a gift alone: then nothing arrives and nothing is stored. */
     hasFood: mail.lines.length > 0,
-    subject: oneLine(t('receipt.subject', { number: mail.orderNumber, credit })),
+    subject: subjectLine(
+      count > 0
+        ? t('receipt.subject', { number: mail.orderNumber, credit })
+        : t('receipt.subjectGift', { organization, number: mail.orderNumber }),
+    ),
     title: t('receipt.title', { name: mail.customerName }),
     preview:
       count > 0
         ? t('receipt.preview', { count, total, days })
         : t('receipt.previewGift', { total, organization }),
-    intro: [
-      ...(count > 0 ? [t('receipt.intro', { credit: mail.creditedTo, count })] : [t('receipt.introGift')]),
-      ...(mail.giftCents > 0
-        ? [t('receipt.introAndGift', { gift: money(mail.giftCents), organization })]
-        : []),
-    ].join(' '),
+    intro: count > 0 ? `${paid} ${gift}`.trim() : t('receipt.introGift', { total, organization }),
     paidOn: fullDay(mail.paidAt, mail.timeZone, locale),
     credit,
     helps: t(mail.organizationBearsCardFees === false ? 'receipt.helpsInFull' : 'receipt.helps', {

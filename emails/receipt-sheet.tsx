@@ -44,25 +44,28 @@ export function ReceiptInFull({ mail, facts }: ReceiptProps) {
 /** The same for an order too long for a mail: without what repeats for every item. */
 export function ReceiptInShort({ mail, facts }: ReceiptProps) {
   const { t } = facts.words
-  const short = t('receipt.inShort', { count: facts.count })
-  const named = { ...facts, food: { ...facts.food, storage: facts.food.storage.map(withoutNames) } }
+  const row = { name: t('receipt.inShort', { count: facts.count }), amount: facts.amount(mail.itemsCents) }
+  const storage = facts.food.storage.map(({ about, sentence }) => ({
+    about:
+      about.length > MOST_NAMES
+        ? [...about.slice(0, MOST_NAMES), t('receipt.andMore', { count: about.length - MOST_NAMES })]
+        : about,
+    sentence,
+  }))
   return (
-    <ReceiptFrame mail={mail} facts={facts} rows={[{ name: short, amount: facts.amount(mail.itemsCents) }]}>
+    <ReceiptFrame mail={mail} facts={facts} rows={[row]}>
       <FrostHeading>{t('receipt.allergens')}</FrostHeading>
+      <FrostLine>{t('receipt.allergensInShort')}</FrostLine>
       {facts.food.together !== null && (
         <FrostLine lead={`${t('receipt.together')}.`}>{facts.food.together}</FrostLine>
       )}
-      <FrostLine>{t('receipt.allergensInShort')}</FrostLine>
-      <StorageLines facts={named} />
+      <StorageLines facts={{ ...facts, food: { ...facts.food, storage, bestQuality: [] } }} />
     </ReceiptFrame>
   )
 }
 
+/** Names in front of a statement, in the short form. */
 const MOST_NAMES = 3
-
-function withoutNames(statement: { about: string[]; sentence: string }) {
-  return statement.about.length > MOST_NAMES ? { ...statement, about: [] } : statement
-}
 
 function ReceiptFrame(
   props: ReceiptProps & {
@@ -96,7 +99,7 @@ function ReceiptFrame(
                 </>
               ),
             },
-            { name: t('receipt.credit'), value: <Typed>{facts.credit}</Typed> },
+            { name: t('receipt.credit'), value: facts.credit },
             ...(facts.hasFood
               ? [
                   { name: t('receipt.helpsName'), value: facts.helps },

@@ -12,7 +12,7 @@ export function receiptText(mail: ReceiptMail, facts: ReceiptFacts): string {
     [
       `${t('receipt.number')}: ${mail.orderNumber}`,
       `${t('receipt.paid')}: ${facts.paidOn}`,
-      `${t('receipt.credit')}: ${isolated(facts.credit)}`,
+      `${t('receipt.credit')}: ${facts.credit}`,
       ...(facts.hasFood
         ? [
             `${t('receipt.helpsName')}: ${facts.helps}`,

@@ -3,7 +3,7 @@ import type { ReactNode } from 'react'
 import type { Locale } from '#shared/wire.ts'
 import { Action, PlainLink } from './action.tsx'
 import type { Ply } from './ink.ts'
-import { oneLine } from './literal.ts'
+import { subjectLine } from './literal.ts'
 import { blocks, linkLines } from './plain-text.ts'
 import { Sheet } from './sheet.tsx'
 import type { Mail } from './words.ts'
@@ -30,7 +30,7 @@ export type Letter = {
 export async function writeLetter(letter: Letter): Promise<Mail> {
   const { action } = letter
   const html = await render(
-    <Sheet {...letter} subject={oneLine(letter.subject)}>
+    <Sheet {...letter} subject={subjectLine(letter.subject)}>
       <Part>
         <Title>{letter.title}</Title>
         {letter.sentences.map((sentence, place) => (
@@ -55,5 +55,5 @@ export async function writeLetter(letter: Letter): Promise<Mail> {
     ...letter.after,
     letter.footer,
   )
-  return { subject: oneLine(letter.subject), html, text }
+  return { subject: subjectLine(letter.subject), html, text }
 }

@@ -18,7 +18,12 @@ export function oneLine(text: string): string {
   return text.replace(CONTROL, ' ').replace(DIRECTION, '').replace(LONE_SURROGATE, '\ufffd').trim()
 }
 
-/** The same of every text in the facts of a mail. */
+/** A subject: one line, whatever went into it. */
+export function subjectLine(text: string): string {
+  return text.replace(CONTROL, ' ').replace(/\s+/g, ' ').trim()
+}
+
+/** The facts of a mail with every text in them made one line of literal text. */
 export function literalFacts<T>(facts: T): T {
   if (typeof facts === 'string') return oneLine(facts) as T
   if (Array.isArray(facts)) return facts.map(literalFacts) as T

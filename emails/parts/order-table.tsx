@@ -14,6 +14,7 @@ const head = {
   padding: '6px 0',
 } as const
 const amountCell = {
+  verticalAlign: 'top',
   fontFamily: faces.mono,
   paddingLeft: 12,
   textAlign: 'right',
@@ -34,7 +35,11 @@ export function OrderTable(props: {
           <th scope="col" align="left" style={{ ...head, textAlign: 'left' }}>
             {props.columns[0]}
           </th>
-          <th scope="col" align="right" style={{ ...head, textAlign: 'right', paddingLeft: 12 }}>
+          <th
+            scope="col"
+            align="right"
+            style={{ ...head, textAlign: 'right', paddingLeft: 12, whiteSpace: 'nowrap' }}
+          >
             {props.columns[1]}
           </th>
         </tr>

@@ -18,7 +18,7 @@ export function Perforation() {
       cellPadding="0"
       cellSpacing="0"
       border={0}
-      style={{ margin: '26px 0 20px' }}
+      style={{ margin: '26px 0 6px' }}
     >
       <tbody>
         <tr>

@@ -68,7 +68,7 @@ export function Sheet(props: {
             {props.footer.map(sentence => (
               <p
                 key={sentence}
-                style={{ color: colors.inkSoft, fontSize: 14, lineHeight: '21px', margin: '0 12px 6px' }}
+                style={{ color: colors.inkSoft, fontSize: 14, lineHeight: '21px', margin: '0 4px 6px' }}
               >
                 {sentence}
               </p>
@@ -86,7 +86,7 @@ function Masthead() {
     <Container width="600" style={column}>
       <header
         style={{
-          padding: '0 12px 14px',
+          padding: '0 4px 14px',
           fontFamily: faces.serif,
           fontSize: 22,
           lineHeight: '28px',

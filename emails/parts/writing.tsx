@@ -58,7 +58,7 @@ export function Para(props: { children: ReactNode }) {
 
 export function Small(props: { children: ReactNode }) {
   return (
-    <p style={{ color: colors.inkSoft, fontSize: 15, lineHeight: '23px', margin: '0 0 10px' }}>
+    <p style={{ color: colors.inkSoft, fontSize: 15, lineHeight: '23px', margin: '0 0 16px' }}>
       {props.children}
     </p>
   )
@@ -80,11 +80,12 @@ export function Stamp(props: { children: string }) {
         color: colors.paid,
         display: 'inline-block',
         fontFamily: faces.serif,
-        fontSize: 17,
+        fontSize: 16,
         fontWeight: 800,
         letterSpacing: 1,
-        lineHeight: '20px',
-        padding: '3px 10px',
+        lineHeight: '18px',
+        margin: '0 4px 0 8px',
+        padding: '2px 9px',
         textTransform: 'uppercase',
         transform: 'rotate(-5deg)',
       }}
