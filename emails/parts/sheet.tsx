@@ -5,7 +5,7 @@ import { colors, faces, type Ply, plies } from './ink.ts'
 
 /** For programs that read a style element: cells keep the face of the sheet, and wide windows get wider margins. */
 const STYLE = `
-:root { color-scheme: light; supported-color-schemes: light; }
+:root { color-scheme: light only; supported-color-schemes: light only; }
 td, th, p, a, li { font-family: ${faces.sans}; }
 @media (min-width: 600px) {
   .part { padding-left: 36px !important; padding-right: 36px !important; }
@@ -36,8 +36,8 @@ export function Sheet(props: {
       <Head>
         <title>{props.subject}</title>
         <meta name="viewport" content="width=device-width, initial-scale=1" />
-        <meta name="color-scheme" content="light" />
-        <meta name="supported-color-schemes" content="light" />
+        <meta name="color-scheme" content="light only" />
+        <meta name="supported-color-schemes" content="light only" />
         {/* biome-ignore lint/security/noDangerouslySetInnerHtml: our own constant, which must not be escaped */}
         <style dangerouslySetInnerHTML={{ __html: STYLE }} />
       </Head>
@@ -105,28 +105,33 @@ function Masthead() {
   )
 }
 
+/**
+ * The ply's edge, and under it what the sheet is. No text stands on the color itself: programs that turn a mail
+ * dark change text and background separately, and light text on goldenrod cannot be read.
+ */
 function Band(props: { ply: Ply; band: string; bandAside?: string | undefined }) {
-  const rule = props.ply === 'white' ? `3px double ${colors.ink}` : 'none'
-  const top = props.ply === 'white' ? `8px solid ${colors.ink}` : 'none'
+  const edge = props.ply === 'white' ? colors.ink : plies[props.ply]
   return (
     <table role="presentation" width="100%" cellPadding="0" cellSpacing="0" border={0}>
       <tbody>
         <tr>
-          <td
-            className="part"
-            style={{
-              backgroundColor: plies[props.ply],
-              borderTop: top,
-              borderBottom: rule,
-              color: colors.ink,
-              padding: '11px 20px',
-              lineHeight: '24px',
-            }}
-          >
-            <b style={{ fontFamily: faces.serif, fontSize: 18, paddingRight: 14 }}>{props.band}</b>
-            {props.bandAside !== undefined && (
-              <bdi style={{ fontSize: 15, fontWeight: 600, display: 'inline-block' }}>{props.bandAside}</bdi>
-            )}
+          <td className="part" style={{ borderTop: `12px solid ${edge}`, padding: '0 20px' }}>
+            <div
+              style={{
+                borderBottom: `1px solid ${colors.rule}`,
+                lineHeight: '24px',
+                padding: '13px 0 11px',
+              }}
+            >
+              <b style={{ fontFamily: faces.serif, fontSize: 18, paddingRight: 12 }}>{props.band}</b>
+              {props.bandAside !== undefined && (
+                <bdi
+                  style={{ color: colors.inkSoft, display: 'inline-block', fontSize: 15, fontWeight: 600 }}
+                >
+                  {props.bandAside}
+                </bdi>
+              )}
+            </div>
           </td>
         </tr>
       </tbody>

@@ -4,7 +4,7 @@ import { makeReconciler } from '../payments/reconcile.ts'
 import { takeLease } from './lease.ts'
 
 const MAIL_EVERY_MS = 500
-const RECONCILE_EVERY_MS = 5_000
+const RECONCILE_EVERY_MS = 4_000
 
 /** Starts the work that goes on by itself: sending mail, asking about waiting payments. Returns how to stop it. */
 export function startJobs(deps: Deps): { stop: () => Promise<void> } {
@@ -14,7 +14,8 @@ export function startJobs(deps: Deps): { stop: () => Promise<void> } {
   const loops = [
     repeat(deps, 'mail', MAIL_EVERY_MS, () => mail.round()),
     repeat(deps, 'reconcile', RECONCILE_EVERY_MS, async () => {
-      if (!takeLease(deps, 'reconcile', RECONCILE_EVERY_MS * 6)) return
+      // What a crash left behind is looked at on every start; each step of it may be done twice.
+      if (!takeLease(deps, 'reconcile', RECONCILE_EVERY_MS * 3) && !first) return
       await reconciler.round({ all: first })
       first = false
     }),

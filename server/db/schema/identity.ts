@@ -87,3 +87,11 @@ export const rateLimit = sqliteTable('rate_limit', {
   count: integer().notNull(),
   lastRequest: integer().notNull(),
 })
+
+/** The newest 30-second step whose code somebody has used: a code is good once. Ours, not the library's. */
+export const secondFactorUse = sqliteTable('second_factor_use', {
+  userId: text()
+    .primaryKey()
+    .references(() => user.id, { onDelete: 'cascade' }),
+  lastStep: integer().notNull(),
+})
