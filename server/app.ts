@@ -40,6 +40,7 @@ export function createApp(deps: Deps, pages: PageBuild | null): Express {
   // Links are guessed here or nowhere: only requests that find nothing count.
   app.use(['/s/:token', '/r/:receipt', '/api/stores/:token', '/api/receipts/:receipt'], limits.misses)
   app.post('/api/stores/:token/orders', limits.ordersPerLink)
+  app.post(['/api/account/second-factor', '/api/account/second-factor/{*rest}'], limits.perSession)
   mountIdentity(app, deps, limits.perAccount)
 
   const description = JSON.stringify(toOpenApi(routes))
@@ -60,6 +61,19 @@ export function createApp(deps: Deps, pages: PageBuild | null): Express {
   return app
 }
 
+/** What of the sign-in library is ours to offer; the rest of it (other factors, lists of sessions) stays shut. */
+const identityPaths = [
+  '/sign-in/email',
+  '/sign-in/magic-link',
+  '/two-factor/verify-totp',
+  '/two-factor/verify-backup-code',
+  '/request-password-reset',
+  '/reset-password',
+  '/change-password',
+  '/sign-out',
+  '/get-session',
+].map(path => `/api/auth${path}`)
+
 /**
  * The sign-in library's own routes. It reads the body itself, so ours is read first only to know the account
  * the attempt is for, and handed on untouched.
@@ -74,12 +88,9 @@ function mountIdentity(app: Express, deps: Deps, perAccount: express.RequestHand
     if (req.method !== 'GET' && req.method !== 'HEAD') refuseCrossSite(req, deps.config, 'signed_in')
     next()
   })
-  // A mail scanner follows links; a link is used up only by the button on our own page.
-  app.all(['/api/auth/magic-link/{*rest}', '/api/auth/sign-up/{*rest}'], () => {
-    throw new AppError('not_found')
-  })
   app.post(attempts, express.json({ limit: '4kb' }), perAccount)
-  app.all('/api/auth/{*rest}', deps.identity.handler)
+  // A mail scanner follows links, so using up a link is not among these: the button on our own page does it.
+  app.all(identityPaths, deps.identity.handler)
 }
 
 function sameText(a: string, b: string): boolean {

@@ -1,8 +1,12 @@
+import { orderRoutes } from './drives/order-routes.ts'
 import { driveRoutes } from './drives/routes.ts'
 import type { AnyRoute } from './http/route.ts'
+import { operatorRoutes } from './operator/routes.ts'
 import { receiptRoutes } from './orders/routes.ts'
 import { paymentRoutes } from './payments/routes.ts'
 import { peopleRoutes } from './people/routes.ts'
+import { secondFactorRoutes } from './people/second-factor-routes.ts'
+import { teamRoutes } from './people/team-routes.ts'
 import { sellerRoutes } from './sellers/routes.ts'
 import { storeRoutes } from './stores/routes.ts'
 
@@ -12,6 +16,10 @@ export const routes: readonly AnyRoute[] = [
   ...receiptRoutes,
   ...paymentRoutes,
   ...peopleRoutes,
+  ...secondFactorRoutes,
+  ...teamRoutes,
   ...sellerRoutes,
   ...driveRoutes,
+  ...orderRoutes,
+  ...operatorRoutes,
 ]

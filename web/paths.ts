@@ -10,6 +10,8 @@ export const paths = {
   family: '/family',
   familySeller: (sellerId: string) => `/family/sellers/${sellerId}`,
   organizer: (driveId: string) => `/organizer/${driveId}`,
+  organizerOrders: (driveId: string) => `/organizer/${driveId}/orders`,
+  organizerOrder: (driveId: string, orderId: string) => `/organizer/${driveId}/orders/${orderId}`,
   operator: '/operator',
 }
 
@@ -28,5 +30,15 @@ export const apiPaths = {
   signOutEverywhere: '/api/sign-out-everywhere',
   seller: (sellerId: string) => `/api/sellers/${sellerId}`,
   drive: (driveId: string) => `/api/drives/${driveId}`,
+  driveOrders: (driveId: string) => `/api/drives/${driveId}/orders`,
+  driveOrdersCsv: (driveId: string) => `/api/drives/${driveId}/orders.csv`,
+  driveOrder: (driveId: string, orderId: string) => `/api/drives/${driveId}/orders/${orderId}`,
+  refundOrder: (driveId: string, orderId: string) => `/api/drives/${driveId}/orders/${orderId}/refunds`,
+  moveOrder: (driveId: string, orderId: string) => `/api/drives/${driveId}/orders/${orderId}/move`,
+  closeDriveAt: (driveId: string) => `/api/drives/${driveId}/close-at`,
+  operator: '/api/operator',
+  operatorSearch: (text: string) => `/api/operator/search?q=${encodeURIComponent(text)}`,
+  settlePutAside: (paymentId: string) => `/api/operator/put-aside/${paymentId}/settle`,
+  retryLetter: (letterId: number) => `/api/operator/letters/${letterId}/retry`,
   closeDrive: (driveId: string) => `/api/drives/${driveId}/close`,
 }

@@ -36,15 +36,3 @@ export function literalFacts<T>(facts: T): T {
 export function isolated(text: string): string {
   return RIGHT_TO_LEFT.test(text) ? `${FIRST_STRONG_ISOLATE}${text}${POP_ISOLATE}` : text
 }
-
-// A character that is none, between a typed backslash and the letter that would make it an escape.
-const BREAK = '\ufdd0'
-
-/** The message library reads backslash-u in a finished sentence as an escape; what a person typed is none. */
-export function shieldEscapes(text: string): string {
-  return text.replaceAll(BREAK, '').replace(/\\(?=[ux])/g, `\\${BREAK}`)
-}
-
-export function unshieldEscapes(text: string): string {
-  return text.replaceAll(BREAK, '')
-}

@@ -3,7 +3,7 @@ import { foodTranslator } from '#shared/messages/food.ts'
 import { makeTranslator, type Translate } from '#shared/messages/translate.ts'
 import type { Locale } from '#shared/wire.ts'
 import english from '../locales/en.json' with { type: 'json' }
-import { isolated, shieldEscapes, unshieldEscapes } from './literal.ts'
+import { isolated } from './literal.ts'
 
 export type Mail = { subject: string; html: string; text: string }
 
@@ -33,7 +33,7 @@ export function wordsFor(wanted: Locale): Words {
   const say = makeTranslator<MailKey>(locale, compileCatalog(written[locale] ?? english))
   const words: Words = {
     locale,
-    t: (key, values) => unshieldEscapes(say(key, values && literalValues(values))),
+    t: (key, values) => say(key, values && literalValues(values)),
     food: foodTranslator(locale),
   }
   spoken.set(locale, words)
@@ -44,7 +44,7 @@ function literalValues(values: Record<string, unknown>): Record<string, unknown>
   return Object.fromEntries(
     Object.entries(values).map(([name, value]) => [
       name,
-      typeof value === 'string' ? isolated(shieldEscapes(value)) : value,
+      typeof value === 'string' ? isolated(value) : value,
     ]),
   )
 }

@@ -2,6 +2,7 @@
 import { dirname, join } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { ensureInstalled } from './bootstrap.mjs'
+import { keepCodesShown } from './demo-codes.mjs'
 import { madeUpEnvironment, startService, stopTogether, waitFor } from './services.mjs'
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '../..')
@@ -30,9 +31,10 @@ try {
   services.push(app)
   app.child.once('exit', () => stop(1))
   await waitFor(`http://localhost:${env.PORT}/readyz`)
-  const { describeDemo } = await import('tsx/esm/api').then(tsx =>
-    tsx.tsImport('../demo/describe-demo.ts', import.meta.url),
+  const { describeDemo, demoCodes } = await import('tsx/esm/api').then(tsx =>
+    tsx.tsImport('../demo/seed-demo.ts', import.meta.url),
   )
+  keepCodesShown(env, demoCodes)
   process.stdout.write(describeDemo(env))
 } catch (error) {
   process.stderr.write(`${error.message}\n`)

@@ -27,6 +27,7 @@ export function describeDemo(env: Record<string, string | undefined>): string {
     ...staff.map(person => row(`${person.name}, ${person.role}`, person.email)),
     ...organizers.map(person => row(`${person.name}, ${person.role}`, person.email)),
     ...guardians.map(person => row(`${person.name}, guardian`, person.email)),
+    'Staff, leads and treasurers are asked for a code as well; the mail catcher shows the codes of now.',
     '',
     'Pay with card 4242 4242 4242 4242, any later expiry and any code. Ctrl-C stops everything.',
     '',

@@ -33,8 +33,10 @@ import {
 import { copyPictures, seedCatalog } from './seed-catalog.ts'
 import { type DemoDrive, seedDrive } from './seed-drive.ts'
 import { seedOrders } from './seed-orders.ts'
+import { type SealedFactors, sealDemoFactors, seedSecondFactors } from './seed-second-factor.ts'
 
 export { describeDemo } from './describe-demo.ts'
+export { demoCodeFor, demoCodes } from './seed-second-factor.ts'
 
 const DAY_MS = 86_400_000
 
@@ -52,7 +54,8 @@ export async function seedDemo(env: Record<string, string | undefined>) {
     if (!db.orm.select({ id: drive.id }).from(drive).limit(1).get()) {
       const pictures = copyPictures(config.dataDir)
       const passwordHash = await deps.identity.hashPassword(PASSWORD)
-      inTransaction(db, tx => fill(deps, tx, { pictures, passwordHash }))
+      const factors = await sealDemoFactors(deps.identity.secondFactor)
+      inTransaction(db, tx => fill(deps, tx, { pictures, passwordHash, factors }))
     }
     const booked = join(config.dataDir, '.payments-booked')
     if (!existsSync(booked)) {
@@ -66,9 +69,14 @@ export async function seedDemo(env: Record<string, string | undefined>) {
   }
 }
 
-function fill(deps: Deps, tx: Tx, made: { pictures: Map<string, string>; passwordHash: string }) {
+function fill(
+  deps: Deps,
+  tx: Tx,
+  made: { pictures: Map<string, string>; passwordHash: string; factors: SealedFactors },
+) {
   const now = deps.now()
   const users = seedUsers(tx, made.passwordHash, now)
+  seedSecondFactors(tx, { users, sealed: made.factors, at: now })
   const { catalogId, versionId } = seedCatalog(tx, { pictures: made.pictures, at: now - 120 * DAY_MS })
   const repUserId = users.get(staff[1].email)!
   const [saltmarsh, juniper, windward] = demoDrives(now).map(demo =>

@@ -1,9 +1,11 @@
 import { storeStatus } from '#shared/deadline/store-status.ts'
+import { localDay } from '#shared/deadline/wall-time.ts'
 import type { DriveView } from '#shared/drives/contract.ts'
+import { paceEstimate } from '#shared/pace/pace.ts'
 import type { Deps } from '../deps.ts'
 import { listDays, totalsBySeller } from '../orders/tallies.ts'
 import { listGroups, listHouseSellers, listStudents } from '../sellers/queries.ts'
-import { countWaiting, getDrive } from './queries.ts'
+import { countNeeds, countWaiting, getDrive } from './queries.ts'
 
 /** The organizer's overview, from the kept roll-ups; no line of any order is read. */
 export function toDriveView(deps: Deps, driveId: number, role: string): DriveView {
@@ -44,6 +46,10 @@ export function toDriveView(deps: Deps, driveId: number, role: string): DriveVie
       sellers: students.length,
       sellersWithOrders: students.filter(student => student.items > 0).length,
     },
+    pace: paceOf(drive, days, deps.now(), [...bySeller.values()]),
+    goalCents: drive.goalCents,
+    days: days.map(({ day, items, itemsCents }) => ({ day, items, itemsCents })),
+    needs: countNeeds(orm, driveId),
     groups: listGroups(orm, driveId).map(group => {
       const members = students.filter(student => student.group === group.name)
       const own = houses.filter(house => house.kind === 'group' && house.group === group.name)
@@ -62,6 +68,28 @@ export function toDriveView(deps: Deps, driveId: number, role: string): DriveVie
       itemsCents: student.itemsCents,
     })),
   }
+}
+
+/** Estimates of items and money, from the kept days of the drive. */
+function paceOf(
+  drive: { timeZone: string; opensAt: number; closesAt: number },
+  days: ReturnType<typeof listDays>,
+  now: number,
+  bySeller: { items: number; amountCents: number }[],
+) {
+  const estimate = (of: 'items' | 'itemsCents', current: number) =>
+    paceEstimate({
+      byDay: new Map(days.map(day => [day.day, day[of]])),
+      firstDay: localDay(drive.opensAt, drive.timeZone),
+      today: localDay(now, drive.timeZone),
+      lastDay: localDay(drive.closesAt - 60_000, drive.timeZone),
+      current,
+    })
+  const items = estimate('items', sum(bySeller.map(row => row.items)))
+  const itemsCents = estimate('itemsCents', sum(bySeller.map(row => row.amountCents)))
+  return items === null || itemsCents === null || now >= drive.closesAt || now < drive.opensAt
+    ? null
+    : { items, itemsCents }
 }
 
 function sum(numbers: number[]): number {

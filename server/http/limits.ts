@@ -32,6 +32,12 @@ export function makeLimits() {
     misses: limiter({ perMinute: 30, key: byAddress, skipSuccessful: true }),
     /** Orders placed through one link. */
     ordersPerLink: limiter({ perMinute: 120, key: req => `link:${req.params.token}` }),
+    /** Passwords and codes typed by somebody who is signed in. */
+    perSession: limiter({
+      perMinute: 12,
+      key: req =>
+        `session:${/tallykin\.session_token=([^;]{1,64})/.exec(req.headers.cookie ?? '')?.[1] ?? byAddress(req)}`,
+    }),
     /** Sign-in, links and resets for one account, whoever asks. */
     perAccount: limiter({
       perMinute: 10,

@@ -1,5 +1,6 @@
 import type { Deps } from '../deps.ts'
 import { makeMailWorker } from '../mail/worker.ts'
+import { finishOpenRefunds } from '../orders/refund-order.ts'
 import { makeReconciler } from '../payments/reconcile.ts'
 import { takeLease } from './lease.ts'
 
@@ -17,6 +18,7 @@ export function startJobs(deps: Deps): { stop: () => Promise<void> } {
       // What a crash left behind is looked at on every start; each step of it may be done twice.
       if (!takeLease(deps, 'reconcile', RECONCILE_EVERY_MS * 3) && !first) return
       await reconciler.round({ all: first })
+      await finishOpenRefunds(deps)
       first = false
     }),
   ]

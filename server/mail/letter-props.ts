@@ -57,6 +57,8 @@ export function receiptProps(deps: Deps, order: OrderRow) {
     timeZone: setting.timeZone,
     deliveryFrom: setting.deliveryFrom,
     deliveryTo: setting.deliveryTo,
+    handover: setting.sellerKind === 'student' ? ('seller_family' as const) : ('school' as const),
+    organizationBearsCardFees: setting.organizationBearsCardFees,
     receiptUrl: `${deps.config.publicUrl}/r/${order.publicId}`,
     contact: { name: setting.contactName, email: setting.contactEmail },
   }

@@ -9,6 +9,7 @@ export type LetterKind =
   | 'guardian_notice'
   | 'sign_in_link'
   | 'password_reset'
+  | 'second_factor_reset'
   | 'refund_notice'
   | 'staff_notice'
 

@@ -2,6 +2,7 @@ import { renderGuardianNotice } from '#emails/guardian-notice.tsx'
 import { renderOrderCanceled } from '#emails/order-canceled.tsx'
 import { renderPasswordReset } from '#emails/password-reset.tsx'
 import { renderReceipt } from '#emails/receipt.tsx'
+import { renderSecondFactorReset } from '#emails/second-factor-reset.tsx'
 import { renderSignInLink } from '#emails/sign-in-link.tsx'
 import { renderStaffNotice } from '#emails/staff-notice.tsx'
 import type { outbox } from '../db/schema/mail.ts'
@@ -54,6 +55,14 @@ export async function renderLetter(deps: Deps, row: typeof outbox.$inferSelect):
         locale,
         minutes: RESET_MINUTES,
         url: `${site}/reset-password#${String(facts.token)}`,
+      })
+    case 'second_factor_reset':
+      return renderSecondFactorReset({
+        locale,
+        by: String(facts.by),
+        reason: String(facts.reason),
+        signInUrl: `${site}/sign-in?next=/account/second-factor`,
+        newPasswordUrl: `${site}/forgot-password`,
       })
     case 'staff_notice':
       return renderStaffNotice({

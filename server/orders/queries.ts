@@ -98,6 +98,8 @@ export function findOrderSetting(tx: Tx, orderId: number) {
       deliveryTo: driveTerms.deliveryTo,
       shareBp: driveTerms.shareBp,
       prizeEvery: driveTerms.prizeEvery,
+      organizationBearsCardFees: driveTerms.organizationBearsCardFees,
+      sellerKind: seller.kind,
       linkToken: storeLink.token,
       linkState: storeLink.state,
     })
@@ -106,6 +108,7 @@ export function findOrderSetting(tx: Tx, orderId: number) {
     .innerJoin(organization, eq(organization.id, drive.organizationId))
     .innerJoin(driveTerms, eq(driveTerms.id, order.termsId))
     .innerJoin(storeLink, eq(storeLink.id, order.linkId))
+    .innerJoin(seller, eq(seller.id, storeLink.sellerId))
     .where(eq(order.id, orderId))
     .get()
   if (!found) throw new Error(`order ${orderId} has lost its drive`)
@@ -120,6 +123,7 @@ export function listCreditedSellers(tx: Tx, sellerIds: number[]) {
       sellerId: seller.id,
       sellerPublicId: seller.publicId,
       sellerKind: seller.kind,
+      number: seller.number,
       firstName: sellerPerson.firstName,
       lastName: sellerPerson.lastName,
       nameShownSince: sellerPerson.nameShownSince,

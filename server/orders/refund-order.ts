@@ -1,7 +1,7 @@
 import { and, eq, sql } from 'drizzle-orm'
 import { localDay } from '#shared/deadline/wall-time.ts'
 import { AppError } from '#shared/errors.ts'
-import { refundAmount } from '#shared/fees/refund.ts'
+import { type RefundableOrder, refundAmount } from '#shared/fees/refund.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { PaymentServiceError } from '../clients/payments.ts'
 import { driveDay, order, orderLine, sellerTally } from '../db/schema/orders.ts'
@@ -19,6 +19,7 @@ import {
   findOrderSetting,
   findSession,
   listLines,
+  type OrderLineRow,
   type OrderRow,
 } from './queries.ts'
 import { listOpenRefunds, listRefundLines, type RefundRow } from './refund-queries.ts'
@@ -69,20 +70,7 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
       ? lines.map(line => ({ lineId: line.id, quantity: line.quantity - line.refundedQuantity }))
       : request.what
   const decided = refundAmount({
-    order: {
-      lines: lines.map(line => ({
-        id: line.id,
-        quantity: line.quantity,
-        unitPriceCents: line.unitPriceCents,
-        taxCents: line.taxCents,
-        refundedQuantity: line.refundedQuantity,
-        refundedCents: line.refundedCents,
-      })),
-      giftCents: found.giftCents,
-      coverCents: found.coverCents,
-      totalCents: found.totalCents,
-      refundedCents: found.refundedCents,
-    },
+    order: toRefundable(found, lines),
     wanted: wanted.filter(line => line.quantity > 0),
     everything: request.what === 'everything',
   })
@@ -156,6 +144,24 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
     requestId: request.requestId,
   })
   return row
+}
+
+/** What the refund rules need to know of an order. */
+export function toRefundable(row: OrderRow, lines: readonly OrderLineRow[]): RefundableOrder {
+  return {
+    lines: lines.map(line => ({
+      id: line.id,
+      quantity: line.quantity,
+      unitPriceCents: line.unitPriceCents,
+      taxCents: line.taxCents,
+      refundedQuantity: line.refundedQuantity,
+      refundedCents: line.refundedCents,
+    })),
+    giftCents: row.giftCents,
+    coverCents: row.coverCents,
+    totalCents: row.totalCents,
+    refundedCents: row.refundedCents,
+  }
 }
 
 /** Asks the payment service for a reserved refund, with the refund's own key, and notes what it says. */

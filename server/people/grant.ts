@@ -3,6 +3,7 @@ import { AppError } from '#shared/errors.ts'
 import type { Deps } from '../deps.ts'
 import type { Access, Granted, Person } from '../http/route.ts'
 import { findDriveAccess, findGuardianship, listStaffRoles } from './queries.ts'
+import { hasSecondFactor } from './second-factor.ts'
 
 /**
  * Decides whether the request may use the route, by what the memberships say right now.
@@ -24,6 +25,7 @@ export async function grant(deps: Deps, access: Access, req: Request): Promise<G
     case 'staff': {
       const role = listStaffRoles(deps.db.orm, person.userId).find(held => access.roles.includes(held))
       if (!role) throw new AppError('not_found')
+      demandSecondFactor(deps, person)
       return { person, role }
     }
   }
@@ -43,12 +45,22 @@ function grantDrive(
 ): Granted {
   const found = findDriveAccess(deps.db.orm, { userId: person.userId, drivePublicId })
   if (!found) throw new AppError('not_found')
-  if (found.memberRole && access.roles.includes(found.memberRole))
+  if (found.memberRole && access.roles.includes(found.memberRole)) {
+    if (found.memberRole !== 'helper') demandSecondFactor(deps, person)
     return { person, driveId: found.driveId, role: found.memberRole }
+  }
   const staffRole = found.staffRoles.find(
     role => access.staff.includes(role) && (role !== 'rep' || found.repUserId === person.userId),
   )
-  if (staffRole) return { person, driveId: found.driveId, role: staffRole }
+  if (staffRole) {
+    demandSecondFactor(deps, person)
+    return { person, driveId: found.driveId, role: staffRole }
+  }
   // A member of this drive knows that it exists; everybody else learns nothing.
   throw new AppError(found.memberRole ? 'not_allowed' : 'not_found')
+}
+
+/** Leads, treasurers and staff act only behind a second factor; a session of theirs has passed it at sign-in. */
+function demandSecondFactor(deps: Deps, person: Person) {
+  if (!hasSecondFactor(deps.db.orm, person.userId)) throw new AppError('second_factor_needed')
 }

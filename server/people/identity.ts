@@ -6,6 +6,11 @@ import type { Request, RequestHandler } from 'express'
 import type { Config } from '../config.ts'
 import { type Db, schema } from '../db/open.ts'
 import type { Person } from '../http/route.ts'
+import { mayUseSignInLink } from './queries.ts'
+import { makeRecoveryCodes } from './recovery-codes.ts'
+import { withoutCookies } from './request-cookies.ts'
+import { secondFactorDoors } from './second-factor-doors.ts'
+import { secondFactorGuard } from './second-factor-guard.ts'
 
 /** What identity asks of the rest: to mail somebody a link. Called outside any transaction. */
 export type IdentityMail = {
@@ -18,6 +23,9 @@ export type Identity = ReturnType<typeof makeIdentity>
 
 export const LINK_MINUTES = 10
 export const RESET_MINUTES = 10
+/** So many wrong codes in a row, and no code is taken for so long. */
+export const WRONG_CODES = 5
+export const LOCK_MINUTES = 15
 export const CLIENT_ADDRESS_HEADER = 'x-tallykin-client'
 const DAY_SECONDS = 24 * 60 * 60
 
@@ -68,6 +76,7 @@ export function makeIdentity(config: Config, db: Db, mail: IdentityMail) {
         '/sign-in/magic-link': { window: 60, max: 60 },
         '/request-password-reset': { window: 60, max: 60 },
         '/reset-password': { window: 60, max: 60 },
+        '/two-factor/*': { window: 60, max: 120 },
         '/get-session': false,
       },
     },
@@ -83,8 +92,22 @@ export function makeIdentity(config: Config, db: Db, mail: IdentityMail) {
         storeToken: 'hashed',
         sendMagicLink: async ({ email, token }) => mail.signInLink(email, token),
       }),
-      twoFactor({ issuer: 'Tallykin' }),
+      twoFactor({
+        issuer: 'Tallykin',
+        accountLockout: { maxFailedAttempts: WRONG_CODES, durationSeconds: LOCK_MINUTES * 60 },
+        backupCodeOptions: { customBackupCodesGenerate: makeRecoveryCodes },
+      }),
     ],
+    hooks: { before: secondFactorGuard(db) },
+    databaseHooks: {
+      session: {
+        create: {
+          // A link may be older than a role or a factor: asked again when it is used, not only when it is mailed.
+          before: async (begun, context) =>
+            context?.path !== '/magic-link/verify' || mayUseSignInLink(db.orm, begun.userId),
+        },
+      },
+    },
   })
   const handler = toNodeHandler(auth)
 
@@ -92,6 +115,10 @@ export function makeIdentity(config: Config, db: Db, mail: IdentityMail) {
     /** Everything below /api/auth. The client's address is ours to state, never the client's. */
     handler: ((req, res, next) => {
       req.headers[CLIENT_ADDRESS_HEADER] = req.ip ?? ''
+      // A code typed at the door is for coming in; with a session beside it, the library would take it for a
+      // set-up and neither count nor lock.
+      if (req.path.toLowerCase().includes('/two-factor/'))
+        req.headers.cookie = withoutCookies(req.headers.cookie, ['session_token', 'session_data'])
       handler(req, res).catch(next)
     }) satisfies RequestHandler,
 
@@ -121,6 +148,8 @@ export function makeIdentity(config: Config, db: Db, mail: IdentityMail) {
     async endOtherSessions(req: Request) {
       await auth.api.revokeOtherSessions({ headers: fromNodeHeaders(req.headers) })
     },
+
+    secondFactor: secondFactorDoors(auth),
 
     async hashPassword(password: string): Promise<string> {
       const context = await auth.$context

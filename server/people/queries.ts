@@ -31,6 +31,17 @@ export function findDriveAccess(tx: Tx, of: { userId: string; drivePublicId: str
   }
 }
 
+/** Somebody's membership of one drive. */
+export function findMember(tx: Tx, of: { driveId: number; userId: string }) {
+  return (
+    tx
+      .select()
+      .from(driveMember)
+      .where(and(eq(driveMember.driveId, of.driveId), eq(driveMember.userId, of.userId)))
+      .get() ?? null
+  )
+}
+
 export function findGuardianship(tx: Tx, of: { userId: string; sellerPublicId: string }) {
   return (
     tx

@@ -3,6 +3,7 @@ import { AppError } from '#shared/errors.ts'
 import { meReply } from '#shared/people/contract.ts'
 import { reply, route } from '../http/route.ts'
 import { listDesks } from './queries.ts'
+import { secondFactorState } from './second-factor.ts'
 
 export const peopleRoutes = [
   route({
@@ -23,6 +24,7 @@ export const peopleRoutes = [
         })),
         drives: desks.drives,
         staff: desks.staff,
+        secondFactor: secondFactorState(deps.db.orm, person.userId),
       })
     },
   }),

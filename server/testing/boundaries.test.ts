@@ -34,7 +34,7 @@ const rooms: Record<string, { may: string[]; instead: string }> = {
 /** What may step over a border, with the reason. */
 const allowed = [
   // Tests of the server run against the real stand-ins.
-  /^server\/testing\/\S+ -> fakes\//,
+  /^server\/(testing\/\S+|\S+\.test\.ts) -> fakes\//,
   // A test of the tokens reads the style sheet as a text, and the build compiles catalogs with the shared compiler.
   /^web\/vite\/\S+ -> shared\//,
 ]

@@ -11,11 +11,12 @@ import {
   safetyRevision,
 } from '../db/schema/catalogs.ts'
 import { drive, driveTerms, organization } from '../db/schema/drives.ts'
-import { account, user } from '../db/schema/identity.ts'
+import { account, twoFactor, user } from '../db/schema/identity.ts'
 import { driveMember, guardian, staffMember } from '../db/schema/people.ts'
 import { seller, sellerGroup, sellerPerson, storeLink } from '../db/schema/sellers.ts'
 import type { Deps } from '../deps.ts'
 import { newPublicId } from '../ids.ts'
+import { makeRecoveryCodes } from '../people/recovery-codes.ts'
 
 const DAY_MS = 86_400_000
 let serial = 0
@@ -306,6 +307,21 @@ export function makeBuilders(deps: Deps) {
       .run()
   }
 
+  /** An authenticator that is set up and proven. */
+  async function giveSecondFactor(userId: string) {
+    const secret = newPublicId() + newPublicId()
+    const recoveryCodes = makeRecoveryCodes()
+    const { seal } = deps.identity.secondFactor
+    const sealed = { secret: await seal(secret), backupCodes: await seal(JSON.stringify(recoveryCodes)) }
+    orm.delete(twoFactor).where(eq(twoFactor.userId, userId)).run()
+    orm
+      .insert(twoFactor)
+      .values({ id: newPublicId(), userId, ...sealed, verified: true })
+      .run()
+    orm.update(user).set({ twoFactorEnabled: true }).where(eq(user.id, userId)).run()
+    return { secret, recoveryCodes }
+  }
+
   const makeStaff = (userId: string, role: StaffRole) =>
     orm.insert(staffMember).values({ userId, role, since: now() }).run()
   const makeMember = (of: { id: number }, userId: string, role: DriveRole) =>
@@ -324,6 +340,7 @@ export function makeBuilders(deps: Deps) {
     store: makeStore,
     user: makeUser,
     password: givePassword,
+    secondFactor: giveSecondFactor,
     staff: makeStaff,
     member: makeMember,
     guardian: makeGuardian,

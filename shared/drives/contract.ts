@@ -26,6 +26,12 @@ export const driveReply = z.object({
     sellers: z.int(),
     sellersWithOrders: z.int(),
   }),
+  /** What the drive would come to at the pace of its last three full days, in items and cents; null too early. */
+  pace: z.object({ items: z.int(), itemsCents: z.int() }).nullable(),
+  goalCents: cents.nullable(),
+  days: z.array(z.object({ day, items: z.int(), itemsCents: z.int() })),
+  /** What waits for somebody. */
+  needs: z.object({ flags: z.int(), failedLetters: z.int(), openRefunds: z.int() }),
   groups: z.array(z.object({ name: z.string(), sellers: z.int(), items: z.int(), itemsCents: cents })),
   sellers: z.array(
     z.object({ number: z.int(), name: z.string(), group: z.string(), items: z.int(), itemsCents: cents }),

@@ -13,5 +13,22 @@ export function makeTranslator<Key extends string = string>(
   messages: Messages,
 ): Translate<Key> {
   const i18n = setupI18n({ locale, messages: { [locale]: messages } })
-  return (key, values) => i18n._(key, values)
+  return (key, values) => unshield(i18n._(key, values && shieldValues(values)))
+}
+
+/** A character that is none, put between a typed backslash and the letter that would make it an escape. */
+const BREAK = '\ufdd0'
+
+/** The message library reads backslash-u in a finished sentence as an escape; what a person typed is none. */
+function shieldValues(values: Record<string, unknown>): Record<string, unknown> {
+  return Object.fromEntries(
+    Object.entries(values).map(([name, value]) => [
+      name,
+      typeof value === 'string' ? value.replaceAll(BREAK, '').replace(/\\(?=[ux])/g, `\\${BREAK}`) : value,
+    ]),
+  )
+}
+
+function unshield(sentence: string): string {
+  return sentence.replaceAll(BREAK, '')
 }

@@ -16,5 +16,7 @@ export const meReply = z.object({
     z.object({ driveId: z.string(), drive: z.string(), organization: z.string(), role: z.enum(driveRoles) }),
   ),
   staff: z.array(z.enum(staffRoles)),
+  /** `needed`: some desk of theirs stays shut until it is set up. */
+  secondFactor: z.enum(['on', 'needed', 'off']),
 })
 export type Me = z.infer<typeof meReply>

@@ -5,7 +5,10 @@ import { useWords } from '../../lib/i18n.tsx'
 import { Facts } from '../../ui/facts.tsx'
 import { Sheet } from '../../ui/sheet.tsx'
 import { Stamp } from '../../ui/stamp.tsx'
+import { CloseAtDialog } from './close-at-dialog.tsx'
 import { CloseDialog } from './close-dialog.tsx'
+import { DaysChart } from './days-chart.tsx'
+import { NeedsSheet } from './needs-sheet.tsx'
 
 /** Where the drive stands: its state, what was sold, by group and by seller. */
 export function Overview({ view }: { view: DriveView }) {
@@ -13,6 +16,7 @@ export function Overview({ view }: { view: DriveView }) {
     <div className="grid items-start gap-6 lg:grid-cols-[minmax(0,1fr)_minmax(0,1.2fr)]">
       <div className="grid gap-6">
         <StateSheet view={view} />
+        <NeedsSheet view={view} />
         <GroupsSheet view={view} />
       </div>
       <SellersSheet view={view} />
@@ -24,7 +28,8 @@ function StateSheet({ view }: { view: DriveView }) {
   const { t, locale } = useWords()
   const { totals } = view
   const money = (cents: number) => formatMoney(cents, { locale, currency: 'usd' })
-  const mayClose = view.status === 'open' && ['lead', 'rep', 'admin'].includes(view.role)
+  const mayLead = ['lead', 'rep', 'admin'].includes(view.role)
+  const percent = new Intl.NumberFormat(locale, { style: 'percent' })
   return (
     <Sheet as="section" className="px-5 py-6 sm:px-7">
       <div className="flex flex-wrap items-center justify-between gap-4">
@@ -53,14 +58,45 @@ function StateSheet({ view }: { view: DriveView }) {
               name: t('organizer.selling'),
               value: t('organizer.sellingOf', { some: totals.sellersWithOrders, all: totals.sellers }),
             },
+            ...(view.goalCents === null
+              ? []
+              : [
+                  {
+                    name: t('organizer.goal'),
+                    value: t('organizer.goalOf', {
+                      percent: percent.format(totals.itemsCents / view.goalCents),
+                      amount: money(view.goalCents),
+                    }),
+                  },
+                ]),
+            ...(view.pace === null
+              ? []
+              : [
+                  {
+                    name: t('organizer.pace'),
+                    value: (
+                      <>
+                        {t('organizer.paceValue', {
+                          items: view.pace.items,
+                          amount: money(view.pace.itemsCents),
+                        })}
+                        <span className="block text-[0.92em] font-normal text-ink-soft">
+                          {t('organizer.paceNote')}
+                        </span>
+                      </>
+                    ),
+                  },
+                ]),
             { name: t('organizer.turnIn'), value: formatDay(view.turnInOn, locale) },
             { name: t('organizer.delivery'), value: formatDays(view.deliveryFrom, view.deliveryTo, locale) },
           ]}
         />
       </div>
-      {mayClose && (
-        <div className="mt-6">
-          <CloseDialog view={view} />
+      <DaysChart view={view} />
+      {mayLead && view.status !== 'not_open' && (
+        <div className="mt-6 flex flex-wrap gap-3">
+          <CloseAtDialog view={view} />
+          {view.status === 'open' && <CloseDialog view={view} />}
         </div>
       )}
     </Sheet>

@@ -12,3 +12,6 @@ export const driveQuery = (driveId: string) =>
 
 export const closeDrive = (driveId: string, reason: string) =>
   post<unknown>(apiPaths.closeDrive(driveId), { reason })
+
+export const closeDriveAt = (driveId: string, body: { date: string; time: string; reason: string }) =>
+  post<unknown>(apiPaths.closeDriveAt(driveId), body)

@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { useParams } from 'react-router-dom'
+import { DriveNav } from '../../features/drives/drive-nav.tsx'
 import { Overview } from '../../features/drives/overview.tsx'
 import { driveQuery } from '../../features/drives/queries.ts'
 import { DeskLayout } from '../../features/people/desk-layout.tsx'
@@ -16,6 +17,7 @@ export function DrivePage() {
     <DeskLayout ply="canary" title={t('desk.organizer')} aside={view?.organization}>
       {() => (
         <>
+          <DriveNav driveId={driveId} />
           {error && !view && (
             <Notice look="problem">
               <p>{error instanceof ApiError && error.status > 0 ? error.message : t('unreachable')}</p>
