@@ -58,13 +58,13 @@ export function seedCatalog(tx: Tx, options: { pictures: Map<string, string>; at
       .values({
         versionId,
         code: item.code,
-        slug: item.en[0].toLowerCase().replaceAll(/[^a-z]+/g, '-'),
+        slug: item.slug,
         category: item.category,
         position: place,
         priceCents: item.priceCents,
         netWeightG: item.netWeightG,
         printedWeight: item.printedWeight,
-        taxCategory: 'food',
+        taxCategory: item.taxCategory,
         dietary: JSON.stringify(item.dietary),
         casePack: item.casePack,
         volumeMl: item.volumeMl,
@@ -73,9 +73,16 @@ export function seedCatalog(tx: Tx, options: { pictures: Map<string, string>; at
       .returning()
       .get()
     for (const locale of ['en', 'es'] as const) {
-      const [name, pieces, serves, description, preparation] = item[locale]
       tx.insert(catalogItemText)
-        .values({ itemId, locale, name, pieces, serves, description, preparation })
+        .values({
+          itemId,
+          locale,
+          name: locale === 'en' ? item.name : item.nameEs,
+          pieces: item.pieces[locale],
+          serves: item.serves[locale],
+          description: item.description[locale],
+          preparation: item.preparation[locale],
+        })
         .run()
     }
     tx.insert(safetyRevision)
@@ -84,7 +91,7 @@ export function seedCatalog(tx: Tx, options: { pictures: Map<string, string>; at
         code: item.code,
         effectiveAt: at,
         contains: JSON.stringify(item.contains),
-        containsNone: item.contains.length === 0,
+        containsNone: item.containsNone,
         mayContain: JSON.stringify(item.mayContain),
         storage: item.storage,
         bestQualityMin: item.bestQualityMonths?.[0] ?? null,

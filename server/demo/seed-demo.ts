@@ -21,13 +21,14 @@ import { demoId, demoLinks } from './demo-ids.ts'
 import {
   crews,
   guardians,
-  inventNames,
   juniperClasses,
+  juniperSellers,
   organizers,
   otherLeads,
   PASSWORD,
   saltmarshSellers,
   staff,
+  windwardSellers,
   windwardSquads,
 } from './people.ts'
 import { copyPictures, seedCatalog } from './seed-catalog.ts'
@@ -152,7 +153,7 @@ function demoDrives(now: number): DemoDrive[] {
   const arizona = today('America/Phoenix')
   const hawaii = today('Pacific/Honolulu')
   const number = (first: string, last: string) =>
-    String(101 + saltmarshSellers.findIndex(([f, l]) => f === first && l === last))
+    String(saltmarshSellers.find(seller => seller.firstName === first && seller.lastName === last)!.number)
   return [
     {
       key: 'saltmarsh',
@@ -185,7 +186,7 @@ function demoDrives(now: number): DemoDrive[] {
       closesOn: addDays(arizona, -16),
       contact: otherLeads.juniper,
       groups: juniperClasses,
-      sellers: inventNames(120),
+      sellers: juniperSellers,
       goalCents: 900_000,
       shareBp: 4_000,
       links: { '101': { token: demoLinks.closed } },
@@ -200,7 +201,7 @@ function demoDrives(now: number): DemoDrive[] {
       closesOn: addDays(hawaii, 26),
       contact: otherLeads.windward,
       groups: windwardSquads,
-      sellers: inventNames(30),
+      sellers: windwardSellers,
       goalCents: 400_000,
       shareBp: 3_800,
       links: { '101': { token: demoLinks.notOpen } },

@@ -4,6 +4,7 @@ import { drive, driveTerms, organization } from '../db/schema/drives.ts'
 import { seller, sellerGroup, sellerPerson, storeLink } from '../db/schema/sellers.ts'
 import type { Tx } from '../db/transaction.ts'
 import { demoId } from './demo-ids.ts'
+import type { DemoSeller } from './people.ts'
 
 export type DemoDrive = {
   key: string
@@ -14,15 +15,13 @@ export type DemoDrive = {
   opensOn: Day
   closesOn: Day
   contact: { name: string; email: string }
-  groups: string[]
-  sellers: [first: string, last: string][]
+  groups: readonly string[]
+  sellers: readonly DemoSeller[]
   goalCents: number
   shareBp: number
   /** Links with a fixed address, by a seller's number or a group's name. */
   links: Record<string, { token: string; state?: 'live' | 'paused' }>
 }
-
-const FIRST_NUMBER = 101
 
 /** Turn-in within three business days of the close, delivery four weeks after that, never on a weekend. */
 export function usualDates(closesOn: Day) {
@@ -124,16 +123,14 @@ export function seedDrive(
       .returning()
       .get()
   }
-  const perGroup = Math.ceil(demo.sellers.length / groups.length)
-  const sellers = demo.sellers.map(([firstName, lastName], place) => {
-    const number = FIRST_NUMBER + place
+  const sellers = demo.sellers.map(({ number, firstName, lastName, group }) => {
     const made = tx
       .insert(seller)
       .values({
         publicId: demoId(`seller ${demo.key} ${number}`),
         driveId: row.id,
         kind: 'student',
-        groupId: groups[Math.floor(place / perGroup)]!.id,
+        groupId: groups.find(row => row.name === group)!.id,
         number,
         createdAt: agreedAt,
       })

@@ -62,7 +62,7 @@ function seedOrder(
     { versionId: drive.catalogVersionId, catalogId: order.catalogId, locale: 'en' },
     at,
   )
-  const [name, relationship] = customers[random.below(customers.length)]!
+  const customer = customers[random.below(customers.length)]!
   const chosen = new Map<string, number>()
   for (let n = random.below(3) + 1; n > 0; n--)
     chosen.set(catalog.items[random.below(catalog.items.length)]!.code, random.below(3) + 1)
@@ -120,14 +120,7 @@ function seedOrder(
       feeCents: priced.order.feeCents,
       placedAt: at,
     },
-    customer: {
-      name,
-      email: `${name
-        .toLowerCase()
-        .replaceAll(/[^a-z]+/g, '.')
-        .replace(/\.$/, '')}@example.net`,
-      relationship,
-    },
+    customer,
     lines,
   })
   const session = {

@@ -26,6 +26,10 @@ export const deskRoutes: RouteObject[] = [
         path: '/reset-password',
         lazy: lazyPage(() => import('../routes/account/reset-password-page.tsx'), 'ResetPasswordPage'),
       },
+      {
+        path: '/account/second-factor',
+        lazy: lazyPage(() => import('../routes/account/second-factor-page.tsx'), 'SecondFactorPage'),
+      },
       { path: '/family', lazy: lazyPage(() => import('../routes/family/family-page.tsx'), 'FamilyPage') },
       {
         path: '/family/sellers/:sellerId',
@@ -34,6 +38,14 @@ export const deskRoutes: RouteObject[] = [
       {
         path: '/organizer/:driveId',
         lazy: lazyPage(() => import('../routes/organizer/drive-page.tsx'), 'DrivePage'),
+      },
+      {
+        path: '/organizer/:driveId/orders',
+        lazy: lazyPage(() => import('../routes/organizer/orders-page.tsx'), 'OrdersPage'),
+      },
+      {
+        path: '/organizer/:driveId/orders/:orderId',
+        lazy: lazyPage(() => import('../routes/organizer/order-page.tsx'), 'OrderPage'),
       },
       {
         path: '/operator',

@@ -167,7 +167,7 @@ function OrderTableRow({ driveId, order, timeZone, isTicked, onTick }: OrderTabl
           onChange={event => onTick(event.target.checked)}
         />
       </td>
-      <td className="tabular py-2.5 pr-3">
+      <td className="tabular whitespace-nowrap py-2.5 pr-3">
         <Link to={paths.organizerOrder(driveId, order.id)}>{order.number}</Link>
       </td>
       <td className="whitespace-nowrap py-2.5 pr-3">

@@ -10,6 +10,8 @@ import { Notice } from '../../ui/notice.tsx'
 import { PageHeader } from '../../ui/page-header.tsx'
 import type { Ply } from '../../ui/sheet.tsx'
 import { meQuery, signOut, signOutEverywhere } from './queries.ts'
+import { SecondFactorNotice } from './second-factor-notice.tsx'
+import { needsFactorAt } from './where-to.ts'
 
 type DeskLayoutProps = { ply: Ply; title: string; aside?: ReactNode; children: (me: Me) => ReactNode }
 
@@ -46,7 +48,7 @@ export function DeskLayout({ ply, title, aside, children }: DeskLayoutProps) {
             <p>{me.error instanceof ApiError && me.error.status > 0 ? me.error.message : t('unreachable')}</p>
           </Notice>
         )}
-        {me.data && children(me.data)}
+        {me.data && (needsFactorAt(me.data, pathname) ? <SecondFactorNotice /> : children(me.data))}
       </main>
     </>
   )
@@ -62,6 +64,9 @@ function Account({ me }: { me: Me }) {
       <div className="absolute right-0 z-20 mt-1 grid w-72 gap-1 rounded-sm bg-sheet p-3 shadow-sheet outline-1 outline-rule">
         <p className="px-2 text-[0.9em] text-ink-soft">{t('desk.signedInAs', { name: me.email })}</p>
         <DeskLinks me={me} />
+        <Link className="flex min-h-11 items-center px-2 font-semibold" to={paths.secondFactor}>
+          {t('secondFactor.menu')}
+        </Link>
         <Button look="quiet" className="justify-start" onClick={() => leave.mutate()}>
           {t('desk.signOut')}
         </Button>

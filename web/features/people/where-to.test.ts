@@ -35,7 +35,12 @@ test('signing in leads to the desk that was asked for, else to the own one', () 
 })
 
 test('desks that move money stay shut until the second factor is set up; the others open', () => {
-  const drive = (driveId: string, role: 'lead' | 'helper') => ({ driveId, drive: 'D', organization: 'O', role })
+  const drive = (driveId: string, role: 'lead' | 'helper') => ({
+    driveId,
+    drive: 'D',
+    organization: 'O',
+    role,
+  })
   const person: Me = {
     ...guardian,
     drives: [drive('d1', 'lead'), drive('d2', 'helper')],

@@ -1,6 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { type FormEvent, useState } from 'react'
 import { Link, useNavigate, useSearchParams } from 'react-router-dom'
+import { CodeStep } from '../../features/people/code-step.tsx'
 import { DoorPage } from '../../features/people/door-page.tsx'
 import { meQuery, requestLink, signIn } from '../../features/people/queries.ts'
 import { whereTo } from '../../features/people/where-to.ts'
@@ -11,7 +12,7 @@ import { Button } from '../../ui/button.tsx'
 import { TextField } from '../../ui/fields.tsx'
 import { Notice } from '../../ui/notice.tsx'
 
-/** E-mail and password for everybody; for families also a link by e-mail. */
+/** E-mail and password for everybody, then the code of a second factor; for families also a link by e-mail. */
 export function SignInPage() {
   const { t } = useWords()
   const [search] = useSearchParams()
@@ -19,12 +20,18 @@ export function SignInPage() {
   const client = useQueryClient()
   const [email, setEmail] = useState('')
   const [password, setPassword] = useState('')
+  const [asksCode, setAsksCode] = useState(false)
+  async function land() {
+    client.clear()
+    const me = await client.fetchQuery(meQuery)
+    await navigate(whereTo(me, search.get('next')), { replace: true })
+  }
   const enter = useMutation({
     mutationFn: () => signIn({ email: email.trim(), password }),
-    onSuccess: async () => {
-      client.clear()
-      const me = await client.fetchQuery(meQuery)
-      await navigate(whereTo(me, search.get('next')), { replace: true })
+    onSuccess: async answer => {
+      setPassword('')
+      if (answer.twoFactorRedirect) setAsksCode(true)
+      else await land()
     },
   })
   const link = useMutation({ mutationFn: () => requestLink(email.trim()) })
@@ -34,6 +41,12 @@ export function SignInPage() {
     enter.mutate()
   }
 
+  if (asksCode)
+    return (
+      <DoorPage title={t('code.title')}>
+        <CodeStep onSignedIn={land} onStartAgain={() => setAsksCode(false)} />
+      </DoorPage>
+    )
   return (
     <DoorPage title={t('signIn.title')}>
       <form className="grid gap-4" onSubmit={submit}>
