@@ -2,7 +2,7 @@ import { type FormEvent, type ReactNode, useState } from 'react'
 import { useWords } from '../../lib/i18n.tsx'
 import { Button } from '../../ui/button.tsx'
 import { TextField } from '../../ui/fields.tsx'
-import { FieldlessProblem, problemAt } from './problem-at.tsx'
+import { FieldlessProblem, problemAt, useFocusOnProblem } from './problem-at.tsx'
 
 /** Asks for the password once more, before something that a borrowed session must not do. */
 export function PasswordForm(props: {
@@ -12,6 +12,7 @@ export function PasswordForm(props: {
 }) {
   const { t } = useWords()
   const [password, setPassword] = useState('')
+  useFocusOnProblem(props.mutation.error, 'password-again')
   function submit(event: FormEvent) {
     event.preventDefault()
     props.mutation.mutate(password)
@@ -19,6 +20,7 @@ export function PasswordForm(props: {
   return (
     <form className="grid max-w-sm gap-4" onSubmit={submit}>
       <TextField
+        id="password-again"
         label={t('secondFactor.password')}
         hint={props.hint}
         problem={problemAt(props.mutation.error, 'password')}

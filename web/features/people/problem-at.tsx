@@ -1,3 +1,4 @@
+import { useEffect } from 'react'
 import { ApiError } from '../../lib/api.ts'
 import { useWords } from '../../lib/i18n.tsx'
 import { Notice } from '../../ui/notice.tsx'
@@ -16,4 +17,11 @@ export function FieldlessProblem({ error }: { error: Error | null }) {
       <p>{error instanceof ApiError && error.status > 0 ? error.message : t('unreachable')}</p>
     </Notice>
   )
+}
+
+/** Brings somebody whose input was refused back to the field. */
+export function useFocusOnProblem(error: Error | null, fieldId: string) {
+  useEffect(() => {
+    if (error) document.getElementById(fieldId)?.focus()
+  }, [error, fieldId])
 }

@@ -1,12 +1,12 @@
 import { useMutation } from '@tanstack/react-query'
-import { type FormEvent, useState } from 'react'
+import { type FormEvent, useEffect, useRef, useState } from 'react'
 import type { NewSecondFactor } from '#shared/people/second-factor.ts'
 import { useWords } from '../../lib/i18n.tsx'
 import { Button } from '../../ui/button.tsx'
 import { TextField } from '../../ui/fields.tsx'
 import { Sheet } from '../../ui/sheet.tsx'
 import { PasswordForm } from './password-form.tsx'
-import { FieldlessProblem, problemAt } from './problem-at.tsx'
+import { FieldlessProblem, problemAt, useFocusOnProblem } from './problem-at.tsx'
 import { beginSecondFactor, proveSecondFactor } from './second-factor-queries.ts'
 
 /** Setting up an authenticator app: password, picture or secret, a first code. */
@@ -39,6 +39,9 @@ function Prove({ made, onProven }: { made: NewSecondFactor; onProven: (codes: st
     mutationFn: () => proveSecondFactor(code),
     onSuccess: answer => onProven(answer.recoveryCodes),
   })
+  const heading = useRef<HTMLHeadingElement>(null)
+  useEffect(() => heading.current?.focus(), [])
+  useFocusOnProblem(prove.error, 'first-code')
   function submit(event: FormEvent) {
     event.preventDefault()
     prove.mutate()
@@ -46,7 +49,9 @@ function Prove({ made, onProven }: { made: NewSecondFactor; onProven: (codes: st
   return (
     <>
       <div className="mt-6 grid items-start gap-x-7 gap-y-4 sm:grid-cols-[auto_1fr]">
-        <h2 className="text-[1.25rem] sm:col-span-2">{t('secondFactor.step2')}</h2>
+        <h2 ref={heading} tabIndex={-1} className="text-[1.25rem] sm:col-span-2">
+          {t('secondFactor.step2')}
+        </h2>
         <img
           src={`data:image/svg+xml,${encodeURIComponent(made.qrSvg)}`}
           alt={t('secondFactor.qr')}
@@ -66,6 +71,7 @@ function Prove({ made, onProven }: { made: NewSecondFactor; onProven: (codes: st
       <form className="mt-6 grid max-w-sm gap-4" onSubmit={submit}>
         <h2 className="text-[1.25rem]">{t('secondFactor.step3')}</h2>
         <TextField
+          id="first-code"
           label={t('secondFactor.code')}
           problem={problemAt(prove.error, 'code')}
           inputMode="numeric"

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { useState } from 'react'
+import { useRef, useState } from 'react'
 import type { Team } from '#shared/people/second-factor.ts'
 import { useWords } from '../../lib/i18n.tsx'
 import { Button } from '../../ui/button.tsx'
@@ -16,11 +16,12 @@ export function TeamSheet({ driveId }: { driveId: string }) {
   const team = useQuery(teamQuery(driveId))
   const [asked, setAsked] = useState<Member | null>(null)
   const [told, setTold] = useState('')
+  const heading = useRef<HTMLHeadingElement>(null)
   const members = team.data?.members ?? []
   const showsEmail = members.some(member => member.email !== null)
   return (
     <Sheet as="section" className="px-5 py-6 sm:px-7" labelledBy="team">
-      <h2 id="team" className="text-[1.35rem]">
+      <h2 id="team" ref={heading} tabIndex={-1} className="text-[1.35rem]">
         {t('team.title')}
       </h2>
       <FieldlessProblem error={team.error} />
@@ -60,6 +61,8 @@ export function TeamSheet({ driveId }: { driveId: string }) {
           onDone={() => {
             setTold(t('team.resetDone', { name: asked.name }))
             setAsked(null)
+            // The button that had the focus is gone.
+            heading.current?.focus()
           }}
         />
       )}

@@ -4,6 +4,7 @@ import { DriveNav } from '../../features/drives/drive-nav.tsx'
 import { Overview } from '../../features/drives/overview.tsx'
 import { driveQuery } from '../../features/drives/queries.ts'
 import { DeskLayout } from '../../features/people/desk-layout.tsx'
+import { TeamSheet } from '../../features/people/team-sheet.tsx'
 import { ApiError } from '../../lib/api.ts'
 import { useWords } from '../../lib/i18n.tsx'
 import { Notice } from '../../ui/notice.tsx'
@@ -24,6 +25,11 @@ export function DrivePage() {
             </Notice>
           )}
           {view && <Overview view={view} />}
+          {view && (
+            <div className="mt-6">
+              <TeamSheet driveId={driveId} />
+            </div>
+          )}
         </>
       )}
     </DeskLayout>
