@@ -17,7 +17,7 @@ export default defineConfig({
     rollupOptions: { input: ['web/main-store.tsx', 'web/main-desk.tsx'] },
   },
   test: {
-    include: ['{shared,server,emails,web,fakes}/**/*.test.{ts,tsx}'],
+    include: ['{shared,server,emails,web,fakes,e2e}/**/*.test.{ts,tsx}'],
     pool: 'forks',
     testTimeout: 20_000,
     hookTimeout: 20_000,

@@ -36,7 +36,7 @@ export function createApp(deps: Deps, pages: PageBuild | null): Express {
     res.status(state.ready ? 200 : 503).json(state)
   })
 
-  const limits = makeLimits()
+  const limits = makeLimits(deps.config)
   // Links are guessed here or nowhere: only requests that find nothing count.
   app.use(['/s/:token', '/r/:receipt', '/api/stores/:token', '/api/receipts/:receipt'], limits.misses)
   app.post('/api/stores/:token/orders', limits.ordersPerLink)

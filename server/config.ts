@@ -35,6 +35,11 @@ const environment = z.object({
     .regex(/^\d$/, 'must be the number of proxies in front of the server')
     .default('0')
     .transform(Number),
+  ORDERS_PER_LINK_PER_MINUTE: z
+    .string()
+    .regex(/^\d{1,9}$/, 'must be a number of orders')
+    .default('120')
+    .transform(Number),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info'),
   FAULT: z.string().optional(),
 })
@@ -51,6 +56,7 @@ export type Config = {
   mail: { smtpUrl: string; from: string }
   authSecret: string
   trustProxyHops: number
+  ordersPerLinkPerMinute: number
   logLevel: string
   fault: string | null
 }
@@ -89,6 +95,7 @@ export function loadConfig(env: Record<string, string | undefined>): Config {
     mail: { smtpUrl: e.SMTP_URL, from: e.MAIL_FROM },
     authSecret: e.AUTH_SECRET,
     trustProxyHops: e.TRUST_PROXY_HOPS,
+    ordersPerLinkPerMinute: e.ORDERS_PER_LINK_PER_MINUTE,
     logLevel: e.LOG_LEVEL,
     fault: e.FAULT ?? null,
   }

@@ -1,6 +1,7 @@
 import type { Request, RequestHandler } from 'express'
 import { ipKeyGenerator, rateLimit } from 'express-rate-limit'
 import { AppError } from '#shared/errors.ts'
+import type { Config } from '../config.ts'
 
 const MINUTE_MS = 60_000
 
@@ -26,12 +27,15 @@ const byAddress = (req: Request) => ipKeyGenerator(req.ip ?? '')
  * How often, by what. A whole school behind one address orders and looks on without meeting these; guessing
  * links does not.
  */
-export function makeLimits() {
+export function makeLimits(config: Config) {
   return {
     /** Addresses that find nothing: only failed requests count. */
     misses: limiter({ perMinute: 30, key: byAddress, skipSuccessful: true }),
     /** Orders placed through one link. */
-    ordersPerLink: limiter({ perMinute: 120, key: req => `link:${req.params.token}` }),
+    ordersPerLink: limiter({
+      perMinute: config.ordersPerLinkPerMinute,
+      key: req => `link:${req.params.token}`,
+    }),
     /** Passwords and codes typed by somebody who is signed in. */
     perSession: limiter({
       perMinute: 12,
