@@ -1,5 +1,6 @@
 import { orderRoutes } from './drives/order-routes.ts'
 import { driveRoutes } from './drives/routes.ts'
+import { familyRoutes } from './families/routes.ts'
 import type { AnyRoute } from './http/route.ts'
 import { operatorRoutes } from './operator/routes.ts'
 import { receiptRoutes } from './orders/routes.ts'
@@ -19,6 +20,7 @@ export const routes: readonly AnyRoute[] = [
   ...secondFactorRoutes,
   ...teamRoutes,
   ...sellerRoutes,
+  ...familyRoutes,
   ...driveRoutes,
   ...orderRoutes,
   ...operatorRoutes,

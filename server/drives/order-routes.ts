@@ -9,7 +9,9 @@ import {
   refundBody,
   refundReply,
 } from '#shared/drives/orders-contract.ts'
+import { resolveFlagBody } from '#shared/sellers/family-contract.ts'
 import { publicId } from '#shared/wire.ts'
+import { resolveFlags } from '../families/flags.ts'
 import { type Access, type Granted, reply, route } from '../http/route.ts'
 import { moveOrder } from '../orders/move-order.ts'
 import { refundOrder } from '../orders/refund-order.ts'
@@ -113,6 +115,26 @@ export const orderRoutes = [
         requestId,
       })
       return reply(200, { moved: true })
+    },
+  }),
+  route({
+    method: 'post',
+    path: '/drives/:driveId/orders/:orderId/flags/settle',
+    summary: 'Settle a flag: the person is known after all',
+    access: refunding,
+    params: ofOrder,
+    body: resolveFlagBody,
+    replies: { 200: z.object({ settled: z.boolean() }) },
+    handler({ deps, granted, params, body, requestId }) {
+      const row = getOrderOfDrive(deps.db.orm, granted.driveId!, params.orderId)
+      resolveFlags(deps, {
+        orderId: row.id,
+        resolution: 'known',
+        actor: granted.person!.userId,
+        reason: body.reason,
+        requestId,
+      })
+      return reply(200, { settled: true })
     },
   }),
   route({

@@ -10,6 +10,7 @@ import type { Deps } from '../deps.ts'
 import { findOrder } from '../orders/queries.ts'
 import { LINK_MINUTES, RESET_MINUTES } from '../people/identity.ts'
 import { guardianNoticeProps, receiptProps, refundNoticeProps } from './letter-props.ts'
+import { staffNoticeProps } from './staff-notice-props.ts'
 
 export type RenderedLetter = {
   subject: string
@@ -65,14 +66,7 @@ export async function renderLetter(deps: Deps, row: typeof outbox.$inferSelect):
         newPasswordUrl: `${site}/forgot-password`,
       })
     case 'staff_notice':
-      return renderStaffNotice({
-        title: 'A payment was put aside',
-        sentences: [
-          `A payment of ${(Number(facts.amountCents) / 100).toFixed(2)} ${String(facts.currency).toUpperCase()} does not fit its order and was not credited.`,
-          'It waits on the operator desk for somebody to look at it.',
-        ],
-        url: `${site}/operator`,
-      })
+      return renderStaffNotice(staffNoticeProps(deps, facts))
     default:
       throw new LetterError(`no letter is known by the name ${row.kind}`)
   }

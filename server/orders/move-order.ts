@@ -7,6 +7,7 @@ import { seller } from '../db/schema/sellers.ts'
 import { inTransaction, type Tx } from '../db/transaction.ts'
 import type { Deps } from '../deps.ts'
 import { findOrder, listLines, type OrderLineRow, type OrderRow } from './queries.ts'
+import { settleFlags } from './settle-flags.ts'
 
 /**
  * Credits a paid order to the seller it was meant for. The tallies of both follow in the same transaction; what
@@ -52,6 +53,7 @@ export function moveOrder(
       shiftTally(tx, row, line, { sellerId: to.id, sign: 1 })
       tx.update(orderLine).set({ sellerId: to.id }).where(eq(orderLine.id, line.id)).run()
     }
+    settleFlags(tx, { orderId: row.id, resolution: 'moved', actor: move.actor, now: deps.now() })
     logActivity(tx, {
       at: deps.now(),
       driveId: row.driveId,

@@ -23,6 +23,7 @@ import {
   type OrderRow,
 } from './queries.ts'
 import { listOpenRefunds, listRefundLines, type RefundRow } from './refund-queries.ts'
+import { settleFlags } from './settle-flags.ts'
 
 export type RefundRequest = {
   orderPublicId: string
@@ -253,6 +254,8 @@ export function applyRefund(deps: Deps, tx: Tx, row: RefundRow, providerRefundId
   })
   const status = found.refundedCents === found.totalCents ? 'refunded' : 'partly_refunded'
   tx.update(order).set({ status }).where(eq(order.id, found.id)).run()
+  if (status === 'refunded')
+    settleFlags(tx, { orderId: found.id, resolution: 'refunded', actor: row.requestedBy, now })
   logActivity(tx, {
     at: now,
     driveId: found.driveId,

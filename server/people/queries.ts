@@ -125,3 +125,14 @@ export function listStaff(tx: Tx, role: StaffRole) {
     .where(eq(staffMember.role, role))
     .all()
 }
+
+/** Members of a drive in one role, with the drive's public id for the letters they get. */
+export function listMembers(tx: Tx, driveId: number, role: DriveRole) {
+  return tx
+    .select({ userId: user.id, name: user.name, email: user.email, drivePublicId: drive.publicId })
+    .from(driveMember)
+    .innerJoin(user, eq(user.id, driveMember.userId))
+    .innerJoin(drive, eq(drive.id, driveMember.driveId))
+    .where(and(eq(driveMember.driveId, driveId), eq(driveMember.role, role)))
+    .all()
+}

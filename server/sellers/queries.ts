@@ -1,6 +1,6 @@
-import { and, desc, eq, inArray, ne } from 'drizzle-orm'
+import { and, desc, eq, inArray, isNull, ne } from 'drizzle-orm'
 import { drive, driveTerms, organization } from '../db/schema/drives.ts'
-import { order, orderCustomer, orderLine } from '../db/schema/orders.ts'
+import { order, orderCustomer, orderFlag, orderLine } from '../db/schema/orders.ts'
 import { seller, sellerGroup, sellerPerson } from '../db/schema/sellers.ts'
 import type { Tx } from '../db/transaction.ts'
 
@@ -122,4 +122,16 @@ export function listGroups(tx: Tx, driveId: number) {
     .where(eq(sellerGroup.driveId, driveId))
     .orderBy(sellerGroup.position)
     .all()
+}
+
+/** Internal ids of orders that this seller's family flagged and nobody has settled. */
+export function listFlaggedOrders(tx: Tx, sellerId: number): Set<number> {
+  return new Set(
+    tx
+      .select({ orderId: orderFlag.orderId })
+      .from(orderFlag)
+      .where(and(eq(orderFlag.sellerId, sellerId), isNull(orderFlag.resolvedAt)))
+      .all()
+      .map(row => row.orderId),
+  )
 }

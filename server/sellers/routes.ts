@@ -8,7 +8,7 @@ import type { Deps } from '../deps.ts'
 import { reply, route } from '../http/route.ts'
 import { sellerTotals } from '../orders/tallies.ts'
 import { findCurrentLink } from '../stores/queries.ts'
-import { getSeller, listCreditedOrders } from './queries.ts'
+import { getSeller, listCreditedOrders, listFlaggedOrders } from './queries.ts'
 
 const RECENT_ORDERS = 100
 
@@ -32,6 +32,7 @@ export function toSellerView(deps: Deps, sellerId: number): SellerView {
   const row = getSeller(orm, sellerId)
   const link = findCurrentLink(orm, sellerId)
   const totals = sellerTotals(orm, sellerId)
+  const flagged = listFlaggedOrders(orm, sellerId)
   const prize = nextPrize(totals.marks, row.prizeEvery)
   return {
     sellerId: row.publicId,
@@ -39,6 +40,7 @@ export function toSellerView(deps: Deps, sellerId: number): SellerView {
     displayName: `${row.firstName} ${[...row.lastName][0] ?? ''}.`,
     number: row.number ?? 0,
     group: row.group,
+    nameShown: row.nameShownSince !== null,
     organization: row.organization,
     drive: {
       name: row.driveName,
@@ -70,6 +72,7 @@ export function toSellerView(deps: Deps, sellerId: number): SellerView {
       relationship: order.relationship as Relationship,
       placedAt: new Date(order.placedAt).toISOString(),
       status: order.status as OrderStatus,
+      flagged: flagged.has(order.id),
       itemCount: order.lines.reduce((sum, line) => sum + line.quantity - line.refundedQuantity, 0),
       lines: order.lines.map(line => ({ itemCode: line.code, name: line.name, quantity: line.quantity })),
     })),

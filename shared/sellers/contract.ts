@@ -11,6 +11,8 @@ export const familyOrder = z.object({
   relationship,
   placedAt: instant,
   status: orderStatus,
+  /** The family flagged it and the organizer has not settled it yet. */
+  flagged: z.boolean(),
   itemCount: z.int(),
   lines: z.array(z.object({ itemCode: z.string(), name: z.string(), quantity: z.int() })),
 })
@@ -21,6 +23,8 @@ export const sellerReply = z.object({
   displayName: z.string(),
   number: z.int(),
   group: z.string(),
+  /** Whether a guardian agreed that the store shows `displayName`. */
+  nameShown: z.boolean(),
   organization: z.string(),
   drive: z.object({
     name: z.string(),

@@ -5,6 +5,7 @@ import { type MessageKey, useWords } from '../../lib/i18n.tsx'
 import { Facts } from '../../ui/facts.tsx'
 import { ItemCode } from '../../ui/item-code.tsx'
 import { Sheet } from '../../ui/sheet.tsx'
+import { FlagsSheet } from './flags-sheet.tsx'
 import { MoveDialog } from './move-dialog.tsx'
 import { RefundDialog } from './refund-dialog.tsx'
 import { StatusWord } from './status-word.tsx'
@@ -13,7 +14,10 @@ import { StatusWord } from './status-word.tsx'
 export function OrderSheets({ driveId, view }: { driveId: string; view: OrderPageView }) {
   return (
     <div className="grid items-start gap-6 lg:grid-cols-[minmax(0,1.15fr)_minmax(0,1fr)]">
-      <MainSheet driveId={driveId} view={view} />
+      <div className="grid gap-6">
+        <FlagsSheet driveId={driveId} view={view} />
+        <MainSheet driveId={driveId} view={view} />
+      </div>
       <HistorySheet view={view} />
     </div>
   )

@@ -2,6 +2,7 @@ import { formatShortInstant } from '#shared/deadline/formatting.ts'
 import type { SellerView } from '#shared/sellers/contract.ts'
 import { useWords } from '../../lib/i18n.tsx'
 import { Sheet } from '../../ui/sheet.tsx'
+import { FlagDialog } from './flag-dialog.tsx'
 
 /** The credited orders as they come in. A customer's e-mail address is not shown. */
 export function OrdersSheet({ view }: { view: SellerView }) {
@@ -32,6 +33,11 @@ export function OrdersSheet({ view }: { view: SellerView }) {
             <span className="text-right text-[0.95em] text-ink-soft">
               {formatShortInstant(Date.parse(order.placedAt), view.drive.timeZone, locale)}
             </span>
+            {order.flagged ? (
+              <b className="text-stamp">{t('family.flag.flagged')}</b>
+            ) : (
+              order.status !== 'refunded' && <FlagDialog sellerId={view.sellerId} order={order} />
+            )}
           </li>
         ))}
       </ul>

@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query'
 import { useParams } from 'react-router-dom'
 import { DeskLayout } from '../../features/people/desk-layout.tsx'
 import { LinkSheet } from '../../features/sellers/link-sheet.tsx'
+import { NameSheet } from '../../features/sellers/name-sheet.tsx'
 import { OrdersSheet } from '../../features/sellers/orders-sheet.tsx'
 import { sellerQuery } from '../../features/sellers/queries.ts'
 import { TallySheet } from '../../features/sellers/tally-sheet.tsx'
@@ -27,6 +28,7 @@ export function SellerPage() {
             <div className="grid items-start gap-6 lg:grid-cols-[minmax(0,1fr)_minmax(0,1fr)]">
               <div className="grid gap-6">
                 <TallySheet view={view} />
+                <NameSheet view={view} />
                 <LinkSheet view={view} />
               </div>
               <OrdersSheet view={view} />
