@@ -19,8 +19,8 @@ export default defineConfig({
   test: {
     include: ['{shared,server,emails,web,fakes,e2e}/**/*.test.{ts,tsx}'],
     pool: 'forks',
-    testTimeout: 20_000,
-    hookTimeout: 20_000,
+    testTimeout: 60_000,
+    hookTimeout: 60_000,
     maxWorkers: 2,
   },
 })

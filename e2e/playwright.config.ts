@@ -12,8 +12,8 @@ export default defineConfig({
   fullyParallel: false,
   workers: 1,
   retries: 0,
-  timeout: 60_000,
-  expect: { timeout: 10_000 },
+  timeout: 120_000,
+  expect: { timeout: 15_000 },
   forbidOnly: process.env.CI !== undefined,
   use: {
     trace: 'retain-on-failure',

@@ -37,8 +37,6 @@ export function createApp(deps: Deps, pages: PageBuild | null): Express {
   })
 
   const limits = makeLimits(deps.config)
-  // Links are guessed here or nowhere: only requests that find nothing count.
-  app.use(['/s/:token', '/r/:receipt', '/api/stores/:token', '/api/receipts/:receipt'], limits.misses)
   app.post('/api/stores/:token/orders', limits.ordersPerLink)
   app.post(['/api/account/second-factor', '/api/account/second-factor/{*rest}'], limits.perSession)
   mountIdentity(app, deps, limits.perAccount)
@@ -52,13 +50,23 @@ export function createApp(deps: Deps, pages: PageBuild | null): Express {
 
   if (pages) {
     mountStatic(app, deps, pages)
-    mountPages(app, deps, pages)
+    mountPages(app, deps, pages, limits.misses)
   }
   app.use(() => {
     throw new AppError('not_found')
   })
+  // Links are guessed here or nowhere. Only what finds nothing counts, and only that is put off: whoever has a
+  // good link orders on, also from behind the address of somebody who guesses.
+  app.use(['/api/stores', '/api/receipts'], countMisses(limits.misses))
   app.use(errorHandler(deps.log))
   return app
+}
+
+function countMisses(misses: express.RequestHandler): express.ErrorRequestHandler {
+  return (error, req, res, next) => {
+    if (!(error instanceof AppError) || error.code !== 'not_found') return next(error)
+    return misses(req, res, limited => next(limited ?? error))
+  }
 }
 
 /** What of the sign-in library is ours to offer; the rest of it (other factors, lists of sessions) stays shut. */

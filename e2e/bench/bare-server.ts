@@ -210,14 +210,12 @@ app.post('/api/stores/:token/orders', express.json(), async (req, res) => {
   db.transaction(() =>
     insertSession.run(order.id, session.id, session.url, session.expires_at * 1000, now),
   ).immediate()
-  res
-    .status(201)
-    .json({
-      orderNumber: order.number,
-      totalCents: order.cents,
-      payUrl: session.url,
-      receiptUrl: `http://localhost/r/${publicId}`,
-    })
+  res.status(201).json({
+    orderNumber: order.number,
+    totalCents: order.cents,
+    payUrl: session.url,
+    receiptUrl: `http://localhost/r/${publicId}`,
+  })
 })
 
 app.listen(Number(process.env.PORT), '127.0.0.1', () => process.send?.({ ready: true }))

@@ -5,18 +5,13 @@ import type { Config } from '../config.ts'
 
 const MINUTE_MS = 60_000
 
-function limiter(options: {
-  perMinute: number
-  key: (req: Request) => string
-  skipSuccessful?: boolean
-}): RequestHandler {
+function limiter(options: { perMinute: number; key: (req: Request) => string }): RequestHandler {
   return rateLimit({
     windowMs: MINUTE_MS,
     limit: options.perMinute,
     standardHeaders: 'draft-8',
     legacyHeaders: false,
     keyGenerator: options.key,
-    skipSuccessfulRequests: options.skipSuccessful ?? false,
     handler: (_req, _res, next) => next(new AppError('too_many_requests', { retryAfterSeconds: 60 })),
   })
 }
@@ -29,8 +24,8 @@ const byAddress = (req: Request) => ipKeyGenerator(req.ip ?? '')
  */
 export function makeLimits(config: Config) {
   return {
-    /** Addresses that find nothing: only failed requests count. */
-    misses: limiter({ perMinute: 30, key: byAddress, skipSuccessful: true }),
+    /** Requests that found nothing at a link or receipt; asked only once that is known. */
+    misses: limiter({ perMinute: 30, key: byAddress }),
     /** Orders placed through one link. */
     ordersPerLink: limiter({
       perMinute: config.ordersPerLinkPerMinute,

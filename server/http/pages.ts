@@ -48,12 +48,19 @@ const DESKS = [
   '/operator/{*rest}',
 ]
 
-export function mountPages(app: Express, deps: Deps, pages: PageBuild) {
+export function mountPages(app: Express, deps: Deps, pages: PageBuild, misses: RequestHandler) {
+  /** A link that leads nowhere counts against the address that asked for it. */
+  const countMiss = (req: Request, res: Response) =>
+    new Promise<void>((resolve, reject) => {
+      misses(req, res, error => (error ? reject(error) : resolve()))
+    })
+
   app.get('/s/:token', async (req, res) => {
     const token = publicId.safeParse(req.params.token)
     const view = token.success
       ? findStoreView(deps.db, { token: token.data, locale: 'en', now: deps.now() })
       : null
+    if (!view) await countMiss(req, res)
     await sendPage(req, res, view ? { store: { token: token.data!, view } } : { notFound: true })
   })
   app.get('/r/:receipt', async (req, res) => {
@@ -61,6 +68,7 @@ export function mountPages(app: Express, deps: Deps, pages: PageBuild) {
     const view = id.success
       ? findReceipt(deps.db, { receipt: id.data, publicUrl: deps.config.publicUrl })
       : null
+    if (!view) await countMiss(req, res)
     await sendPage(req, res, view ? { receipt: { id: id.data!, view } } : { notFound: true })
   })
   app.get(DESKS, async (req, res) => {
