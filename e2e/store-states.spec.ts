@@ -65,3 +65,13 @@ test('at 320 pixels nothing has to be scrolled sideways', async ({ open, stack }
   )
   expect(tooWide).toBeLessThanOrEqual(0)
 })
+
+test('who looks from another zone reads the deadline on their own clock as well', async ({ open, stack }) => {
+  const page = await open({ timezoneId: 'America/Los_Angeles' })
+  await page.goto(`${stack.url}/s/${demoLinks.maya}`)
+  await expect(page.getByText(/8:59 pm where you are/)).toBeVisible()
+  const near = await open()
+  await near.goto(`${stack.url}/s/${demoLinks.maya}`)
+  await expect(near.getByText(/11:59 pm/).first()).toBeVisible()
+  await expect(near.getByText(/where you are/)).toHaveCount(0)
+})

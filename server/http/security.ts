@@ -28,7 +28,10 @@ export function pagePolicy(res: Response, config: Config): string {
     [
       "default-src 'none'",
       `script-src 'self' 'nonce-${nonce}'`,
-      `style-src 'self' 'nonce-${nonce}'`,
+      // Vite puts styles into the page while developing.
+      config.mode === 'development'
+        ? "style-src 'self' 'unsafe-inline'"
+        : `style-src 'self' 'nonce-${nonce}'`,
       "img-src 'self' data: blob:",
       "font-src 'self'",
       `connect-src 'self'${config.mode === 'development' ? ' ws:' : ''}`,
