@@ -1,6 +1,9 @@
 import { isOneSlipApart } from './one-slip.ts'
 
-export type Cleaned = { ok: true; text: string } | { ok: false; message: string }
+/** Why a text is refused; worded by the catalog of refusals under `text.…`. */
+export type TextProblem = 'broken' | 'unprintable' | 'tooManyMarks' | 'tooLong'
+
+export type Cleaned = { ok: true; text: string } | { ok: false; problem: TextProblem }
 
 // Controls (a line break is allowed where asked for), and code points that change the direction of what follows.
 const CONTROL = /[^\P{Cc}\t\r\n]|[\u2028\u2029\ufff9-\ufffb]/u
@@ -17,15 +20,12 @@ const MANY_MARKS = /\p{M}{9,}/u
  * code points, as people count letters.
  */
 export function cleanText(input: string, options: { max: number; multiline?: boolean }): Cleaned {
-  if (LONE_SURROGATE.test(input))
-    return { ok: false, message: 'This holds a broken character. Please type it again.' }
+  if (LONE_SURROGATE.test(input)) return { ok: false, problem: 'broken' }
   const text = trimInvisible(input.normalize('NFC').replace(DIRECTION, ''))
   if (CONTROL.test(text) || (!options.multiline && /[\t\r\n]/.test(text)))
-    return { ok: false, message: 'This holds characters that cannot be printed. Please type it again.' }
-  if (MANY_MARKS.test(text))
-    return { ok: false, message: 'This cannot be printed. Please type it more simply.' }
-  if ([...text].length > options.max)
-    return { ok: false, message: `Please use at most ${options.max} letters.` }
+    return { ok: false, problem: 'unprintable' }
+  if (MANY_MARKS.test(text)) return { ok: false, problem: 'tooManyMarks' }
+  if ([...text].length > options.max) return { ok: false, problem: 'tooLong' }
   return { ok: true, text }
 }
 

@@ -2,6 +2,7 @@ import { eq } from 'drizzle-orm'
 import { addDays, daysBetween } from '#shared/calendar.ts'
 import { closeInstant } from '#shared/deadline/wall-time.ts'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { drive } from '../db/schema/drives.ts'
 import { inTransaction } from '../db/transaction.ts'
@@ -12,10 +13,10 @@ import { getDrive } from './queries.ts'
 const LONGEST_DAYS = 120
 
 const reasons = {
-  nonexistent: 'On that day the clocks go forward and skip this time. Please choose another.',
-  invalid_zone: 'This fundraiser has no valid time zone.',
-  invalid_date: 'There is no such day.',
-  invalid_time: 'There is no such time.',
+  nonexistent: refusal('onThatDayTheClocksGo'),
+  invalid_zone: refusal('thisFundraiserHasNoValidTime'),
+  invalid_date: refusal('thereIsNoSuchDay'),
+  invalid_time: refusal('thereIsNoSuchTime'),
 }
 
 /**
@@ -34,13 +35,12 @@ export function closeAt(
     const resolved = closeInstant(options, row.timeZone)
     if (!resolved.ok)
       throw refused(resolved.reason === 'invalid_time' ? 'time' : 'date', reasons[resolved.reason])
-    if (resolved.instant <= now)
-      throw refused('date', 'That moment has passed. Use "Close now" to close at once.')
-    if (resolved.instant <= row.opensAt) throw refused('date', 'That is before the fundraiser opens.')
+    if (resolved.instant <= now) throw refused('date', refusal('thatMomentHasPassedUseClose'))
+    if (resolved.instant <= row.opensAt) throw refused('date', refusal('thatIsBeforeTheFundraiserOpens'))
     if (daysBetween(row.opensOn, options.date) > LONGEST_DAYS)
       throw refused(
         'date',
-        `A fundraiser is open for at most ${LONGEST_DAYS} days, until ${addDays(row.opensOn, LONGEST_DAYS)}.`,
+        refusal('openForAtMost', { days: LONGEST_DAYS, until: addDays(row.opensOn, LONGEST_DAYS) }),
       )
     const before = Math.min(row.closesAt, row.closedEarlyAt ?? row.closesAt)
     tx.update(drive)

@@ -1,5 +1,6 @@
 import { and, eq, isNull } from 'drizzle-orm'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { drive } from '../db/schema/drives.ts'
 import { inTransaction } from '../db/transaction.ts'
@@ -21,9 +22,9 @@ export function closeEarly(
     const now = deps.now()
     const { drive: row } = getDrive(tx, options.driveId)
     if (row.launchedAt === null || now < row.opensAt)
-      throw new AppError('conflict', { detail: 'This fundraiser has not opened yet. Nothing was changed.' })
+      throw new AppError('conflict', { detail: refusal('thisFundraiserHasNotOpenedYet') })
     if (row.closedEarlyAt !== null || now >= row.closesAt)
-      throw new AppError('conflict', { detail: 'This fundraiser is closed already. Nothing was changed.' })
+      throw new AppError('conflict', { detail: refusal('thisFundraiserIsClosedAlreadyNothing') })
     tx.update(drive)
       .set({ closedEarlyAt: now })
       .where(and(eq(drive.id, options.driveId), isNull(drive.closedEarlyAt)))

@@ -1,5 +1,6 @@
 import { and, eq, ne } from 'drizzle-orm'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { storeLink } from '../db/schema/sellers.ts'
 import { inTransaction } from '../db/transaction.ts'
@@ -23,7 +24,7 @@ export function changeLink(deps: Deps, change: LinkChange & { to: 'paused' | 'li
       .where(and(eq(storeLink.sellerId, change.sellerId), ne(storeLink.state, 'replaced')))
       .get()
     if (!current || current.state === change.to)
-      throw new AppError('conflict', { detail: 'The link is so already. Nothing was changed.' })
+      throw new AppError('conflict', { detail: refusal('theLinkIsSoAlreadyNothing') })
     tx.update(storeLink)
       .set({ state: change.to, endedAt: change.to === 'replaced' ? now : null })
       .where(eq(storeLink.id, current.id))

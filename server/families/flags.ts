@@ -1,5 +1,6 @@
 import { and, eq, inArray } from 'drizzle-orm'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { order, orderFlag, orderLine } from '../db/schema/orders.ts'
 import { inTransaction } from '../db/transaction.ts'
@@ -93,7 +94,7 @@ export function resolveFlags(
   inTransaction(deps.db, tx => {
     const row = tx.select().from(order).where(eq(order.id, of.orderId)).get()!
     if (settleFlags(tx, { ...of, now: deps.now() }) === 0)
-      throw new AppError('conflict', { detail: 'No flag is open on this order. Nothing was changed.' })
+      throw new AppError('conflict', { detail: refusal('noFlagIsOpenOnThis') })
     logActivity(tx, {
       at: deps.now(),
       driveId: row.driveId,

@@ -2,6 +2,7 @@ import { STATUS_CODES } from 'node:http'
 import type { ErrorRequestHandler, Request, Response } from 'express'
 import type { Logger } from 'pino'
 import { AppError, type ErrorCode } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 
 const statusOf: Record<ErrorCode, number> = {
   invalid_input: 400,
@@ -29,30 +30,28 @@ const statusOf: Record<ErrorCode, number> = {
 }
 
 const sentences: Record<ErrorCode, string> = {
-  invalid_input: 'Something in this request needs mending.',
-  not_found: 'There is nothing at this address.',
-  not_signed_in: 'Please sign in first.',
-  not_allowed: 'Your account may not do this.',
-  second_factor_needed: 'Please set up your second factor first.',
-  cross_site: 'This request came from another site and was not carried out.',
-  method_not_allowed: 'This address does not take that kind of request.',
-  unsupported_media_type: 'Send JSON, encoded as UTF-8.',
-  too_large: 'This is larger than what can be taken.',
-  too_many_requests: 'Too many requests in a short time. Please wait a moment and try again.',
-  store_not_open: 'This store is not open yet. Nothing was ordered.',
-  store_paused: 'This store is paused. Nothing was ordered.',
-  store_closed: 'This store has closed. Nothing was ordered.',
-  total_changed: 'Prices have changed. Nothing was ordered; please look at the new total.',
-  item_unavailable: 'An item is no longer available. Nothing was ordered; the rest of your order is kept.',
-  key_reused: 'This key was already used for another order.',
-  in_progress: 'This order is being placed right now. Please ask again in a moment.',
-  conflict: 'This was changed by somebody else in the meantime. Please look again.',
-  payments_stopped:
-    'Payments for this fundraiser are on hold while the numbers are being checked. Nothing was charged.',
-  payment_service_unreachable:
-    'The payment service does not answer. Nothing was charged and your order is kept; please try again.',
-  busy: 'The server is busy. Please try again in a moment.',
-  internal: 'Something went wrong on our side. It has been noted.',
+  invalid_input: refusal('somethingInThisRequestNeedsMending'),
+  not_found: refusal('thereIsNothingAtThisAddress'),
+  not_signed_in: refusal('pleaseSignInFirst'),
+  not_allowed: refusal('yourAccountMayNotDoThis'),
+  second_factor_needed: refusal('pleaseSetUpYourSecondFactor'),
+  cross_site: refusal('thisRequestCameFromAnotherSite'),
+  method_not_allowed: refusal('thisAddressDoesNotTakeThat'),
+  unsupported_media_type: refusal('sendJsonEncodedAsUtf8'),
+  too_large: refusal('thisIsLargerThanWhatCan'),
+  too_many_requests: refusal('tooManyRequestsInAShort'),
+  store_not_open: refusal('thisStoreIsNotOpenYet'),
+  store_paused: refusal('thisStoreIsPausedNothingWas'),
+  store_closed: refusal('thisStoreHasClosedNothingWas'),
+  total_changed: refusal('pricesHaveChangedNothingWasOrdered'),
+  item_unavailable: refusal('anItemIsNoLongerAvailable'),
+  key_reused: refusal('thisKeyWasAlreadyUsedFor'),
+  in_progress: refusal('thisOrderIsBeingPlacedRight'),
+  conflict: refusal('thisWasChangedBySomebodyElse'),
+  payments_stopped: refusal('paymentsForThisFundraiserAreOn'),
+  payment_service_unreachable: refusal('thePaymentServiceDoesNotAnswer'),
+  busy: refusal('theServerIsBusyPleaseTry'),
+  internal: refusal('somethingWentWrongOnOurSide'),
 }
 
 export function statusOfCode(code: ErrorCode): number {
@@ -87,7 +86,7 @@ export function toAppError(thrown: unknown, log: Logger, requestId: string): App
   if (parserStatus === 413) return new AppError('too_large')
   if (parserStatus === 415) return new AppError('unsupported_media_type')
   if (typeof parserStatus === 'number' && parserStatus >= 400 && parserStatus < 500)
-    return new AppError('invalid_input', { detail: 'This request could not be read.' })
+    return new AppError('invalid_input', { detail: refusal('thisRequestCouldNotBeRead') })
   const code = (thrown as { code?: unknown } | null)?.code
   if (code === 'SQLITE_BUSY' || code === 'SQLITE_FULL' || code === 'SQLITE_READONLY') {
     log.error({ requestId, code }, 'database refused')

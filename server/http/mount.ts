@@ -1,6 +1,7 @@
 import express, { type Express, type Request, type Response } from 'express'
 import type { z } from 'zod'
 import { AppError, type FieldProblem } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import type { Deps } from '../deps.ts'
 import { grant } from '../people/grant.ts'
 import type { AnyRoute } from './route.ts'
@@ -105,7 +106,7 @@ function refuseDeep(input: unknown) {
   let level: unknown[] = [input]
   for (let depth = 0; level.length > 0; depth++) {
     if (depth > MAX_DEPTH)
-      throw new AppError('invalid_input', { detail: 'This request is nested too deeply.' })
+      throw new AppError('invalid_input', { detail: refusal('thisRequestIsNestedTooDeeply') })
     level = level.flatMap(value => (value !== null && typeof value === 'object' ? Object.values(value) : []))
   }
 }

@@ -1,5 +1,6 @@
 import { and, eq, isNull } from 'drizzle-orm'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { outbox } from '../db/schema/mail.ts'
 import { paymentPutAside } from '../db/schema/payments.ts'
@@ -19,8 +20,7 @@ export function settlePutAside(deps: Deps, of: By & { publicId: string; resoluti
       .set({ resolvedAt: deps.now(), resolution: of.resolution })
       .where(and(eq(paymentPutAside.id, row.id), isNull(paymentPutAside.resolvedAt)))
       .run()
-    if (changes !== 1)
-      throw new AppError('conflict', { detail: 'This was settled already. Nothing was changed.' })
+    if (changes !== 1) throw new AppError('conflict', { detail: refusal('thisWasSettledAlreadyNothingWas') })
     logActivity(tx, {
       at: deps.now(),
       driveId: null,

@@ -1,5 +1,6 @@
 import { and, eq, sql } from 'drizzle-orm'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { orderLine, sellerTally } from '../db/schema/orders.ts'
 import { refund } from '../db/schema/payments.ts'
@@ -24,7 +25,7 @@ export function moveOrder(
     const row = findOrder(tx, move.orderPublicId)
     if (!row) throw new AppError('not_found')
     if (row.status !== 'paid' && row.status !== 'partly_refunded')
-      throw new AppError('conflict', { detail: 'Only a paid order can be moved. Nothing was changed.' })
+      throw new AppError('conflict', { detail: refusal('onlyAPaidOrderCanBe') })
     const underWay = tx
       .select({ id: refund.id })
       .from(refund)
@@ -32,7 +33,7 @@ export function moveOrder(
       .get()
     if (underWay)
       throw new AppError('conflict', {
-        detail: 'A refund of this order is under way. Please look again in a moment; nothing was changed.',
+        detail: refusal('aRefundOfThisOrderIs'),
       })
     const to = tx
       .select({ id: seller.id, publicId: seller.publicId })
@@ -41,12 +42,14 @@ export function moveOrder(
       .get()
     if (!to)
       throw new AppError('invalid_input', {
-        errors: [{ path: 'sellerNumber', message: `No seller has the number ${move.sellerNumber}.` }],
+        errors: [
+          { path: 'sellerNumber', message: refusal('noSellerHasTheNumber', { number: move.sellerNumber }) },
+        ],
       })
     const lines = listLines(tx, row.id).filter(line => line.sellerId !== to.id)
     if (lines.length === 0)
       throw new AppError('conflict', {
-        detail: 'This order is credited to that seller already. Nothing was changed.',
+        detail: refusal('thisOrderIsCreditedToThat'),
       })
     for (const line of lines) {
       shiftTally(tx, row, line, { sellerId: line.sellerId, sign: -1 })

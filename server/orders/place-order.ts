@@ -1,6 +1,7 @@
 import { createHash, randomBytes } from 'node:crypto'
 import { AppError } from '#shared/errors.ts'
 import { makeOrderNumber } from '#shared/ids.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import type { PlacedOrder, PlaceOrderInput } from '#shared/orders/contract.ts'
 import { DEFAULT_ORDER_LIMITS } from '#shared/pricing/limits.ts'
 import { priceOrder } from '#shared/pricing/order-total.ts'
@@ -127,7 +128,10 @@ function price(deps: Deps, store: Store, input: PlaceOrderInput, now: number) {
   const lines = input.lines.flatMap((line, index) => {
     const item = catalog.byCode.get(line.itemCode)
     if (item?.available) return [{ line, item }]
-    gone.push({ path: `lines.${index}.itemCode`, message: `Item ${line.itemCode} is no longer available.` })
+    gone.push({
+      path: `lines.${index}.itemCode`,
+      message: refusal('itemNoLongerAvailable', { code: line.itemCode }),
+    })
     return []
   })
   if (gone.length > 0) throw new AppError('item_unavailable', { errors: gone })
@@ -178,12 +182,12 @@ function price(deps: Deps, store: Store, input: PlaceOrderInput, now: number) {
 
 function limitSentence(code: string): string {
   const sentences: Record<string, string> = {
-    empty_order: 'Choose at least one item, or give a gift.',
-    too_many_lines: 'An order has at most 60 lines.',
-    too_many_items: 'An order has at most 200 items.',
-    quantity_out_of_range: 'A quantity is a whole number from 1 to 99.',
-    order_too_large: 'An order is at most 5,000.00. Please make two orders of it.',
-    gift_out_of_range: 'A gift is from 1.00 to 1,000.00.',
+    empty_order: refusal('chooseAtLeastOneItemOr'),
+    too_many_lines: refusal('anOrderHasAtMost60'),
+    too_many_items: refusal('anOrderHasAtMost200'),
+    quantity_out_of_range: refusal('aQuantityIsAWholeNumber'),
+    order_too_large: refusal('anOrderIsAtMost500000'),
+    gift_out_of_range: refusal('aGiftIsFrom100To'),
   }
-  return sentences[code] ?? 'Please check this.'
+  return sentences[code] ?? refusal('pleaseCheckThis')
 }

@@ -2,6 +2,7 @@ import { and, eq, sql } from 'drizzle-orm'
 import { localDay } from '#shared/deadline/wall-time.ts'
 import { AppError } from '#shared/errors.ts'
 import { type RefundableOrder, refundAmount } from '#shared/fees/refund.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { PaymentServiceError } from '../clients/payments.ts'
 import { driveDay, order, orderLine, sellerTally } from '../db/schema/orders.ts'
@@ -54,7 +55,7 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
   const found = findOrder(tx, request.orderPublicId)
   if (!found) throw new AppError('not_found')
   if (found.status !== 'paid' && found.status !== 'partly_refunded')
-    throw new AppError('conflict', { detail: 'This order has nothing left to refund. Nothing was changed.' })
+    throw new AppError('conflict', { detail: refusal('thisOrderHasNothingLeftTo') })
   const lines = listLines(tx, found.id)
   const open = tx
     .select({ id: refund.id })
@@ -63,8 +64,7 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
     .get()
   if (open)
     throw new AppError('conflict', {
-      detail:
-        'Another refund of this order is under way. Please look again in a moment; nothing was changed.',
+      detail: refusal('anotherRefundOfThisOrderIs'),
     })
   const wanted =
     request.what === 'everything'
@@ -75,8 +75,7 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
     wanted: wanted.filter(line => line.quantity > 0),
     everything: request.what === 'everything',
   })
-  if (!decided.ok)
-    throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
+  if (!decided.ok) throw new AppError('conflict', { detail: refusal('thatIsMoreThanWhatIs') })
 
   for (const line of decided.lines) {
     const { changes } = tx
@@ -93,8 +92,7 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
         ),
       )
       .run()
-    if (changes !== 1)
-      throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
+    if (changes !== 1) throw new AppError('conflict', { detail: refusal('thatIsMoreThanWhatIs') })
   }
   const { changes } = tx
     .update(order)
@@ -106,8 +104,7 @@ export function reserveRefund(deps: Deps, tx: Tx, request: RefundRequest): Refun
       ),
     )
     .run()
-  if (changes !== 1)
-    throw new AppError('conflict', { detail: 'That is more than what is left. Nothing was changed.' })
+  if (changes !== 1) throw new AppError('conflict', { detail: refusal('thatIsMoreThanWhatIs') })
 
   const row = tx
     .insert(refund)

@@ -1,5 +1,6 @@
 import { and, asc, eq, isNull, lt } from 'drizzle-orm'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import type { PaymentAnnouncement, SessionState } from '../clients/payments.ts'
 import { paymentEvent } from '../db/schema/payments.ts'
 import { inTransaction } from '../db/transaction.ts'
@@ -24,7 +25,7 @@ export async function receiveEvent(deps: Deps, request: { rawBody: unknown; sign
     if (!Buffer.isBuffer(request.rawBody) || !request.signature) throw new Error('no body or signature')
     announced = deps.payments.readAnnouncement(request.rawBody, request.signature)
   } catch {
-    throw new AppError('invalid_input', { detail: 'This message is not signed by the payment service.' })
+    throw new AppError('invalid_input', { detail: refusal('thisMessageIsNotSignedBy') })
   }
   hit('F09')
   const isNew = inTransaction(deps.db, tx => {

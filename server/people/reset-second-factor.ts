@@ -1,5 +1,6 @@
 import { eq } from 'drizzle-orm'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { user } from '../db/schema/identity.ts'
 import { inTransaction, type Tx } from '../db/transaction.ts'
@@ -22,7 +23,7 @@ export function resetMemberFactor(deps: Deps, reset: Reset & { driveId: number; 
   inTransaction(deps.db, tx => {
     if (!findMember(tx, reset)) throw new AppError('not_found')
     if (reset.role !== 'admin' && listStaffRoles(tx, reset.userId).length > 0)
-      throw new AppError('not_allowed', { detail: 'Only an admin may do this for a member of staff.' })
+      throw new AppError('not_allowed', { detail: refusal('onlyAnAdminMayDoThis') })
     takeOff(tx, { ...reset, at: deps.now() })
   })
 }
@@ -38,11 +39,10 @@ export function resetStaffFactor(deps: Deps, reset: Reset) {
 function takeOff(tx: Tx, reset: Reset & { driveId: number | null; at: number }) {
   if (reset.userId === reset.by.userId)
     throw new AppError('not_allowed', {
-      detail: 'Somebody else has to do this for you, after a call. Nothing was changed.',
+      detail: refusal('somebodyElseHasToDoThis'),
     })
   const factor = findFactor(tx, reset.userId)
-  if (!factor)
-    throw new AppError('conflict', { detail: 'This person has no second factor. Nothing was changed.' })
+  if (!factor) throw new AppError('conflict', { detail: refusal('thisPersonHasNoSecondFactor') })
   deleteFactor(tx, reset.userId, reset.at)
   endSessions(tx, reset.userId)
   logActivity(tx, {

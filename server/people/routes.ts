@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { meReply } from '#shared/people/contract.ts'
 import { reply, route } from '../http/route.ts'
 import { listDesks } from './queries.ts'
@@ -34,14 +35,14 @@ export const peopleRoutes = [
     summary: 'Use up a mailed sign-in link; the mailed page asks for this with a button',
     access: { who: 'anyone' },
     body: z.strictObject({
-      token: z.string().regex(/^[A-Za-z0-9_-]{16,128}$/, 'This link is not complete.'),
+      token: z.string().regex(/^[A-Za-z0-9_-]{16,128}$/, refusal('thisLinkIsNotComplete')),
     }),
     replies: { 200: z.object({ signedIn: z.boolean() }) },
     async handler({ deps, body, request }) {
       const cookies = await deps.identity.consumeSignInLink(request, body.token)
       if (!cookies)
         throw new AppError('invalid_input', {
-          detail: 'This link was used already or is more than 10 minutes old. Please ask for a new one.',
+          detail: refusal('thisLinkWasUsedAlreadyOr'),
         })
       return reply(200, { signedIn: true }, { 'Set-Cookie': cookies })
     },

@@ -1,6 +1,7 @@
 import type { Request } from 'express'
 import { toString as toQr } from 'qrcode'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { logActivity } from '../activity/log-activity.ts'
 import { inTransaction } from '../db/transaction.ts'
 import type { Deps } from '../deps.ts'
@@ -12,14 +13,14 @@ type Asked = { person: Person; request: Request }
 
 const wrongPassword = () =>
   new AppError('invalid_input', {
-    detail: 'This is not the password of this account. Nothing was changed.',
-    errors: [{ path: 'password', message: 'This is not the password of this account.' }],
+    detail: refusal('thisIsNotThePasswordOf'),
+    errors: [{ path: 'password', message: refusal('thisIsNotThePasswordOf2') }],
   })
 
 const wrongCode = () =>
   new AppError('invalid_input', {
-    detail: 'This code does not fit. Please type the one your app shows now.',
-    errors: [{ path: 'code', message: 'This code does not fit. Please type the one your app shows now.' }],
+    detail: refusal('thisCodeDoesNotFitPlease'),
+    errors: [{ path: 'code', message: refusal('thisCodeDoesNotFitPlease') }],
   })
 
 /**
@@ -30,7 +31,7 @@ const wrongCode = () =>
  */
 export async function beginSecondFactor(deps: Deps, asked: Asked & { password: string }) {
   if (hasSecondFactor(deps.db.orm, asked.person.userId))
-    throw new AppError('conflict', { detail: 'Your second factor is set up already. Nothing was changed.' })
+    throw new AppError('conflict', { detail: refusal('yourSecondFactorIsSetUp') })
   const address = await deps.identity.secondFactor.begin(asked.request, asked.password)
   if (address === null) throw wrongPassword()
   const secret = new URL(address).searchParams.get('secret') ?? ''
@@ -48,7 +49,7 @@ export async function proveSecondFactor(deps: Deps, asked: Asked & { code: strin
   const { userId } = asked.person
   const factor = findFactor(deps.db.orm, userId)
   if (!factor || factor.verified)
-    throw new AppError('conflict', { detail: 'There is no set-up to finish. Please begin it anew.' })
+    throw new AppError('conflict', { detail: refusal('thereIsNoSetupToFinish') })
   const secret = await deps.identity.secondFactor.open(factor.secret)
   const step = matchingStep(secret, asked.code, Date.now())
   if (step === null || !claimStep(deps.db, { userId, step })) throw wrongCode()
@@ -80,7 +81,7 @@ export async function renewRecoveryCodes(
 ): Promise<string[]> {
   const { userId } = asked.person
   if (!hasSecondFactor(deps.db.orm, userId))
-    throw new AppError('conflict', { detail: 'Please set up your second factor first.' })
+    throw new AppError('conflict', { detail: refusal('pleaseSetUpYourSecondFactor') })
   const codes = await deps.identity.secondFactor.renewRecoveryCodes(asked.request, asked.password)
   if (codes === null) throw wrongPassword()
   inTransaction(deps.db, tx =>

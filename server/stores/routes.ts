@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { AppError } from '#shared/errors.ts'
+import { refusal } from '#shared/messages/refusals.ts'
 import { idempotencyKey, placeOrderBody, placeOrderReply } from '#shared/orders/contract.ts'
 import { storeQuery, storeReply } from '#shared/stores/contract.ts'
 import { publicId } from '#shared/wire.ts'
@@ -41,7 +42,7 @@ export const storeRoutes = [
       const key = idempotencyKey.safeParse(header('idempotency-key'))
       if (!key.success)
         throw new AppError('invalid_input', {
-          errors: [{ path: 'Idempotency-Key', message: 'Send an Idempotency-Key of 8 to 200 characters.' }],
+          errors: [{ path: 'Idempotency-Key', message: refusal('sendAnIdempotencykeyOf8To') }],
         })
       return reply(
         201,

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { refusal } from '../messages/refusals.ts'
 import { storeStatusSchema } from '../stores/contract.ts'
 import { cents, day, instant } from '../wire.ts'
 
@@ -41,6 +42,6 @@ export type DriveView = z.infer<typeof driveReply>
 
 /** Closing early takes a reason, which the activity log keeps. */
 export const closeEarlyBody = z.strictObject({
-  reason: z.string().trim().min(3, 'Say why, in a few words.').max(300),
+  reason: z.string().trim().min(3, refusal('sayWhyInAFewWords')).max(300),
 })
 export const closeEarlyReply = z.object({ closedAt: instant, awaitingPayment: z.int() })

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { refusal } from '../messages/refusals.ts'
 import { orderStatus, receiptLine, relationship } from '../orders/contract.ts'
 import { cents, instant, publicId } from '../wire.ts'
 
@@ -106,7 +107,7 @@ export const orderPageReply = z.object({
 })
 export type OrderPageView = z.infer<typeof orderPageReply>
 
-const reason = z.string().trim().min(3, 'Say why, in a few words.').max(300)
+const reason = z.string().trim().min(3, refusal('sayWhyInAFewWords')).max(300)
 
 export const refundBody = z.strictObject({
   /** Everything that is left, or so many of certain lines. */
@@ -114,7 +115,7 @@ export const refundBody = z.strictObject({
     z.literal('everything'),
     z
       .array(z.strictObject({ lineId: z.int().min(1), quantity: z.int().min(1).max(99) }))
-      .min(1, 'Choose what to give back.')
+      .min(1, refusal('chooseWhatToGiveBack'))
       .max(60),
   ]),
   reason,
@@ -127,14 +128,14 @@ export const refundReply = z.object({
 export const moveBody = z.strictObject({
   sellerNumber: z
     .int()
-    .min(100, 'A seller number has three digits.')
-    .max(999, 'A seller number has three digits.'),
+    .min(100, refusal('aSellerNumberHasThreeDigits'))
+    .max(999, refusal('aSellerNumberHasThreeDigits')),
   reason,
 })
 
 export const closeAtBody = z.strictObject({
-  date: z.string().regex(/^\d{4}-\d{2}-\d{2}$/, 'Choose a day.'),
-  time: z.string().regex(/^\d{2}:\d{2}$/, 'Choose a time.'),
+  date: z.string().regex(/^\d{4}-\d{2}-\d{2}$/, refusal('chooseADay')),
+  time: z.string().regex(/^\d{2}:\d{2}$/, refusal('chooseATime')),
   reason,
 })
 export const closeAtReply = z.object({ closesAt: instant, before: instant })

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { refusal } from '../messages/refusals.ts'
 import { cents, day, instant, publicId } from '../wire.ts'
 import { stages } from './stages.ts'
 
@@ -49,7 +50,7 @@ export const operatorReply = z.object({
 export type OperatorView = z.infer<typeof operatorReply>
 
 export const searchQuery = z.strictObject({
-  q: z.string().trim().min(2, 'Write at least two letters.').max(100),
+  q: z.string().trim().min(2, refusal('writeAtLeastTwoLetters')).max(100),
 })
 export const searchReply = z.object({
   orders: z.array(
@@ -69,5 +70,5 @@ export const searchReply = z.object({
 export type SearchView = z.infer<typeof searchReply>
 
 export const settleBody = z.strictObject({
-  resolution: z.string().trim().min(3, 'Say what was done, in a few words.').max(300),
+  resolution: z.string().trim().min(3, refusal('sayWhatWasDoneInA')).max(300),
 })

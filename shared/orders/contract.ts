@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { refusal } from '../messages/refusals.ts'
 import { cleanText, isEmailAddress } from '../text.ts'
 import { cents, day, instant, locale, publicId } from '../wire.ts'
 import { relationshipNames } from './relationships.ts'
@@ -8,11 +9,11 @@ function typed(max: number, min = 1) {
   return z.string().transform((raw, context) => {
     const cleaned = cleanText(raw, { max })
     if (!cleaned.ok) {
-      context.addIssue({ code: 'custom', message: cleaned.message })
+      context.addIssue({ code: 'custom', message: refusal(`text.${cleaned.problem}`, { max }) })
       return z.NEVER
     }
     if (cleaned.text.length < min) {
-      context.addIssue({ code: 'custom', message: 'Please fill this in.' })
+      context.addIssue({ code: 'custom', message: refusal('pleaseFillThisIn') })
       return z.NEVER
     }
     return cleaned.text
@@ -26,18 +27,18 @@ export const placeOrderBody = z.strictObject({
   lines: z
     .array(
       z.strictObject({
-        itemCode: z.string().regex(/^\d{4}$/, 'An item code has four digits.'),
-        quantity: z.int('A quantity is a whole number from 1 to 99.').min(1).max(99),
+        itemCode: z.string().regex(/^\d{4}$/, refusal('anItemCodeHasFourDigits')),
+        quantity: z.int(refusal('aQuantityIsAWholeNumber')).min(1).max(99),
         recipientLabel: typed(60).optional(),
       }),
     )
-    .max(60, 'An order has at most 60 lines.'),
+    .max(60, refusal('anOrderHasAtMost60')),
   giftCents: z.int().min(0).max(100_000),
   coverFee: z.boolean(),
   quotedTotalCents: z.int().min(0).max(1_000_000_000),
   customer: z.strictObject({
     name: typed(100),
-    email: z.string().max(254).refine(isEmailAddress, 'Please check this e-mail address.'),
+    email: z.string().max(254).refine(isEmailAddress, refusal('pleaseCheckThisEmailAddress')),
     relationship,
   }),
   locale,
@@ -48,9 +49,7 @@ export type PlaceOrderInput = z.infer<typeof placeOrderBody>
 /** What the browser sends, before cleaning. */
 export type PlaceOrderRequest = z.input<typeof placeOrderBody>
 
-export const idempotencyKey = z
-  .string()
-  .regex(/^[\x21-\x7e]{8,200}$/, 'Send an Idempotency-Key of 8 to 200 characters.')
+export const idempotencyKey = z.string().regex(/^[\x21-\x7e]{8,200}$/, refusal('sendAnIdempotencykeyOf8To'))
 
 export const placeOrderReply = z.object({
   orderNumber: z.string(),

@@ -1,8 +1,9 @@
 import { z } from 'zod'
+import { refusal } from '../messages/refusals.ts'
 import { driveRoles } from './contract.ts'
 
-const password = z.string().min(1, 'Please type your password.').max(128)
-const reason = z.string().trim().min(3, 'Say why, in a few words.').max(300)
+const password = z.string().min(1, refusal('pleaseTypeYourPassword')).max(128)
+const reason = z.string().trim().min(3, refusal('sayWhyInAFewWords')).max(300)
 /** Somebody's own id; ids made by hand or by the sign-in library have other lengths than ours. */
 export const userId = z.string().regex(/^[A-Za-z0-9_-]{16,64}$/)
 

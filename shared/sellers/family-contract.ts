@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { refusal } from '../messages/refusals.ts'
 import { cleanText } from '../text.ts'
 
 export const consentBody = z.strictObject({ show: z.boolean() })
@@ -11,11 +12,11 @@ export const flagBody = z.strictObject({
     .transform((raw, context) => {
       const cleaned = cleanText(raw, { max: 300, multiline: true })
       if (cleaned.ok) return cleaned.text
-      context.addIssue({ code: 'custom', message: cleaned.message })
+      context.addIssue({ code: 'custom', message: refusal(`text.${cleaned.problem}`, { max: 300 }) })
       return z.NEVER
     }),
 })
 
 export const resolveFlagBody = z.strictObject({
-  reason: z.string().trim().min(3, 'Say why, in a few words.').max(300),
+  reason: z.string().trim().min(3, refusal('sayWhyInAFewWords')).max(300),
 })
