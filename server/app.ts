@@ -39,7 +39,7 @@ export function createApp(deps: Deps, pages: PageBuild | null): Express {
   const limits = makeLimits(deps.config)
   app.post('/api/stores/:token/orders', limits.ordersPerLink)
   app.post(['/api/account/second-factor', '/api/account/second-factor/{*rest}'], limits.perSession)
-  mountIdentity(app, deps, limits.perAccount)
+  mountIdentity(app, deps, limits)
 
   const description = JSON.stringify(toOpenApi(routes))
   app.get('/api/openapi.json', (_req, res) => void res.type('application/json').send(description))
@@ -86,17 +86,18 @@ const identityPaths = [
  * The sign-in library's own routes. It reads the body itself, so ours is read first only to know the account
  * the attempt is for, and handed on untouched.
  */
-function mountIdentity(app: Express, deps: Deps, perAccount: express.RequestHandler) {
-  const attempts = [
-    '/api/auth/sign-in/email',
-    '/api/auth/sign-in/magic-link',
-    '/api/auth/request-password-reset',
-  ]
+function mountIdentity(app: Express, deps: Deps, limits: ReturnType<typeof makeLimits>) {
   app.use('/api/auth', (req, _res, next) => {
     if (req.method !== 'GET' && req.method !== 'HEAD') refuseCrossSite(req, deps.config, 'signed_in')
     next()
   })
-  app.post(attempts, express.json({ limit: '4kb' }), perAccount)
+  const readAccount = express.json({ limit: '4kb' })
+  app.post('/api/auth/sign-in/email', readAccount, limits.wrongPasswords)
+  app.post(
+    ['/api/auth/sign-in/magic-link', '/api/auth/request-password-reset'],
+    readAccount,
+    limits.lettersPerAccount,
+  )
   // A mail scanner follows links, so using up a link is not among these: the button on our own page does it.
   app.all(identityPaths, deps.identity.handler)
 }

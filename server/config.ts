@@ -38,7 +38,7 @@ const environment = z.object({
   ORDERS_PER_LINK_PER_MINUTE: z
     .string()
     .regex(/^\d{1,9}$/, 'must be a number of orders')
-    .default('120')
+    .default('1200')
     .transform(Number),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info'),
   FAULT: z.string().optional(),

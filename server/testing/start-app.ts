@@ -73,7 +73,7 @@ export async function startApp(options: { fakes?: boolean; pages?: PageBuild | n
     mail: { smtpUrl: `smtp://127.0.0.1:${fakes?.mail.smtpPort ?? 9}`, from: 'orders@tallykin.example' },
     authSecret: 'a-secret-for-tests-that-is-long-enough',
     trustProxyHops: 0,
-    ordersPerLinkPerMinute: 120,
+    ordersPerLinkPerMinute: 1200,
     logLevel: 'silent',
     fault: null,
   }

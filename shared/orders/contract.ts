@@ -49,7 +49,7 @@ export type PlaceOrderInput = z.infer<typeof placeOrderBody>
 /** What the browser sends, before cleaning. */
 export type PlaceOrderRequest = z.input<typeof placeOrderBody>
 
-export const idempotencyKey = z.string().regex(/^[\x21-\x7e]{8,200}$/, refusal('sendAnIdempotencykeyOf8To'))
+export const idempotencyKey = z.string().regex(/^[\x21-\x7e]{1,200}$/, refusal('sendAnIdempotencykeyOf8To'))
 
 export const placeOrderReply = z.object({
   orderNumber: z.string(),
