@@ -270,3 +270,19 @@ test('gift, cover and a label for somebody are on the order and on the payment p
   expect(receipt.body.lines[0].recipientLabel).toBe('Ana')
   expect((await fakes.sessions())[0].amount_total).toBe(5180)
 })
+
+test('who orders by a group’s link is credited to the group and told that the school hands the food over', async () => {
+  const { api, make } = await startApp()
+  const drive = make.drive()
+  const group = make.group(drive, 'Chassis')
+  const link = make.link(make.houseSeller(drive, group))
+
+  expect((await api.get(`/api/stores/${link.token}`)).body).toMatchObject({
+    seller: null,
+    group: { name: 'Chassis' },
+  })
+  const reply = await api.post(`/api/stores/${link.token}/orders`, anOrder(), key('group'))
+
+  const receipt = await api.get(`/api/receipts/${reply.body.receiptUrl.split('/').at(-1)}`)
+  expect(receipt.body).toMatchObject({ creditedTo: 'Chassis', handover: 'school' })
+})

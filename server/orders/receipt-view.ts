@@ -60,6 +60,7 @@ export function findReceipt(db: Db, options: { receipt: string; publicUrl: strin
     refundedCents: order.refundedCents,
     currency: order.currency,
     creditedTo: [...new Set(names.values())].join(', ') || setting.organizationName,
+    handover: setting.sellerKind === 'student' ? 'seller_family' : 'school',
     organization: { name: setting.organizationName },
     drive: {
       timeZone: setting.timeZone,

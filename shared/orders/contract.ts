@@ -107,6 +107,8 @@ export const receiptReply = z.object({
   refundedCents: cents,
   currency: z.string(),
   creditedTo: z.string(),
+  /** Who hands the order over: the seller's family, or the school for a group's link. */
+  handover: z.enum(['seller_family', 'school']),
   organization: z.object({ name: z.string() }),
   drive: z.object({ timeZone: z.string(), deliveryFrom: day, deliveryTo: day, closesAt: instant }),
   contact: z.object({ name: z.string(), email: z.string() }),

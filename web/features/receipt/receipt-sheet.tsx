@@ -33,7 +33,9 @@ export function ReceiptSheet({ view }: { view: ReceiptView }) {
                     value: (
                       <>
                         {formatDays(drive.deliveryFrom, drive.deliveryTo, locale)}
-                        <span className="block text-[0.92em] font-normal">{t('receipt.how')}</span>
+                        <span className="block text-[0.92em] font-normal">
+                          {view.handover === 'school' ? t('receipt.howSchool') : t('receipt.how')}
+                        </span>
                       </>
                     ),
                   },
